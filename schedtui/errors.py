@@ -1,0 +1,85 @@
+"""Every exception this program raises on purpose, in one tree.
+
+SchedtuiError
+├── FileError            a file cannot be read or written (not there, too large, no regular file, …)
+│   └── FileChanged      the file on disk is not the one that was read
+├── ScheduleError        a file was read but is no valid schedule; carries every problem found
+├── SpliceError          edits could not be written into the source without touching something else
+├── AmountError          a typed number, or number with unit, cannot be accepted
+├── AirError             no moist air has the stated properties
+└── UsageError           a command was asked for something it does not do
+
+Knows nothing of the rest of the program; everything else may import it.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+from dataclasses import dataclass
+
+
+class SchedtuiError(Exception):
+    """The root: whatever derives from it is reported in one line, never as a traceback."""
+
+
+class FileError(SchedtuiError):
+    """A file cannot be read or written; the text names the file and says why."""
+
+
+class FileChanged(FileError):
+    """The file on disk no longer has the content that was read."""
+
+
+class AmountError(SchedtuiError):
+    """A typed number, or a number with a unit, cannot be accepted; the text says what is."""
+
+
+class AirError(SchedtuiError):
+    """No moist air has the stated properties (a wet bulb above its dry bulb, for one)."""
+
+
+class SpliceError(SchedtuiError):
+    """Writing edits into the source would not have held exactly those edits."""
+
+
+class UsageError(SchedtuiError):
+    """A command line that cannot be carried out."""
+
+
+@dataclass(frozen=True, slots=True)
+class Problem:
+    """One thing that keeps a file from being read as a schedule.
+
+    Args:
+        line: line in the file, counted from 1; 0 where the problem has no line.
+        subject: what it is about: a unit's tag, `condition NAME`, `plant NAME`, `defaults`,
+            `project`; empty for the file as a whole.
+        key: the key at fault, or empty.
+        value: the value as typed, or empty.
+        accepted: what is wrong and what would be accepted, as one phrase.
+    """
+
+    line: int
+    subject: str
+    key: str
+    value: str
+    accepted: str
+
+    def __str__(self) -> str:
+        """Return the problem as one phrase, without the file and line."""
+        where = " ".join(part for part in (self.subject, self.key) if part)
+        what = f"{self.value} {self.accepted}" if self.value else self.accepted
+        return f"{where}: {what}" if where else what
+
+
+class ScheduleError(SchedtuiError):
+    """A file is no valid schedule.
+
+    Args:
+        problems: every problem found, in the order of their lines; never empty.
+    """
+
+    def __init__(self, problems: Sequence[Problem]) -> None:
+        """Keep the problems; the text of the exception is the first of them."""
+        self.problems = tuple(problems)
+        super().__init__(str(self.problems[0]))
