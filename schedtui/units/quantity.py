@@ -1,7 +1,7 @@
-"""The two unit systems, the quantities a schedule is made of, and numbers typed with a unit.
+"""The two unit systems and the quantities that a schedule is made of.
 
 Everything else names a quantity from here and never a unit by itself. Knows nothing of
-schedules or air; pint stands behind the conversions and is loaded when first needed.
+schedules, of air, or of how one unit becomes another.
 """
 
 from __future__ import annotations
