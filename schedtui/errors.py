@@ -7,15 +7,19 @@ SchedtuiError
 ├── SpliceError          edits could not be written into the source without touching something else
 ├── AmountError          a typed number, or number with unit, cannot be accepted
 ├── AirError             no moist air has the stated properties
-└── UsageError           a command was asked for something it does not do
+├── UsageError           a command was asked for something it does not do
+└── Absent               a figure cannot be had; names the keys that would give it
 
 Knows nothing of the rest of the program; everything else may import it.
 """
 
 from __future__ import annotations
 
-from collections.abc import Sequence
 from dataclasses import dataclass
+from typing import TYPE_CHECKING
+
+if TYPE_CHECKING:
+    from collections.abc import Sequence
 
 
 class SchedtuiError(Exception):
@@ -83,3 +87,17 @@ class ScheduleError(SchedtuiError):
         """Keep the problems; the text of the exception is the first of them."""
         self.problems = tuple(problems)
         super().__init__(str(self.problems[0]))
+
+
+class Absent(SchedtuiError):
+    """A figure cannot be had because what it needs is not stated, or cannot be read.
+
+    Args:
+        keys: the keys to state, in the order they were missed.
+        why: a phrase for what is wrong where stating a key is not the cure.
+    """
+
+    def __init__(self, *keys: str, why: str = "") -> None:
+        self.keys = keys
+        self.why = why
+        super().__init__(why or f"not stated: {', '.join(keys)}")

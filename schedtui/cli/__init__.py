@@ -1,0 +1,1 @@
+"""The commands: what schedtui does without a screen."""

@@ -1,0 +1,1 @@
+"""Documents: what was found and computed, as pages that any format can render."""

@@ -1,0 +1,127 @@
+"""The page of a check: what was found, worst first, and each unit in one line."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from schedtui.report.page import (
+    CAUTION,
+    Block,
+    Entries,
+    Entry,
+    Heading,
+    Page,
+    Paragraph,
+    Table,
+)
+from schedtui.review.figure import known
+from schedtui.review.finding import WORST_FIRST, Finding, Measure
+from schedtui.review.quantities import COLUMNS
+from schedtui.schedule.catalogue.unit import Unit
+from schedtui.units import ALTITUDE, STATION_PRESSURE, format_number
+
+if TYPE_CHECKING:
+    from collections.abc import Iterator
+
+    from schedtui.review.reviewed import Review, UnitReview
+
+_IN_SUMMARY = ("total_required", "total_margin", "shr", "tons_required")
+_NOTHING = "-"
+
+
+def findings_page(review: Review, file: str) -> Page:
+    """Return the page of a review.
+
+    Args:
+        review: the review.
+        file: the file's name as the person gave it.
+    """
+    project = review.schedule.project
+    blocks: list[Block] = [
+        Heading(f"{project.title or 'No title'} ({file})", 1),
+        Paragraph(f"{site_line(review)}. {_sizes(review)}."),
+        Paragraph(counts_line(review)),
+    ]
+    for severity in WORST_FIRST:
+        found = [one for one in review.all_findings if one.severity == severity]
+        if found:
+            blocks.append(Heading(f"{severity.word.capitalize()} ({len(found)})"))
+            blocks.append(Entries(tuple(map(_entry, found))))
+    if review.units:
+        blocks += [Heading("Units"), _summary(review)]
+    return Page((*blocks, Paragraph(CAUTION)))
+
+
+def site_line(review: Review) -> str:
+    """Say the unit system, the site's pressure and what airflows mean."""
+    system, project = review.schedule.system, review.schedule.project
+    pressure = Measure(review.site.air.pressure, STATION_PRESSURE).text(system)
+    where = f"station pressure {pressure}"
+    if project.pressure is None:
+        altitude = project.altitude or 0.0
+        where = f"{Measure(altitude, ALTITUDE).text(system)} above sea level ({pressure})"
+    basis = "" if project.stated("airflow_basis") else ", by default"
+    return f"{system} units, {where}, airflows {project.airflow_basis}{basis}"
+
+
+def counts_line(review: Review) -> str:
+    """Say how much was found, by severity."""
+    counts = review.counts()
+    words = [f"{counts[severity.word]} {severity.word}" for severity in WORST_FIRST]
+    words += [f"{counts['clear']} units clear", f"{counts['accepted']} accepted"]
+    if counts["rounding"]:
+        words.append(f"{counts['rounding']} of the cautions within the printed digits")
+    return ", ".join(words)
+
+
+def _sizes(review: Review) -> str:
+    units, conditions = len(review.units), len(review.schedule.conditions)
+    return (
+        f"{units} unit{'' if units == 1 else 's'}, "
+        f"{conditions} condition{'' if conditions == 1 else 's'}"
+    )
+
+
+def _entry(finding: Finding) -> Entry:
+    head = finding.check
+    subject = finding.subject
+    if finding.condition and subject.table == "unit":
+        head += f" at {finding.condition}"
+    if finding.margin is not None and finding.scheduled is not None:
+        head += f", {finding.margin:+.1f} %"
+    if finding.accepted:
+        head += " (accepted)"
+    return Entry(subject.label, head, (finding.message,))
+
+
+def _summary(review: Review) -> Table:
+    """Return one line a unit: what it is scheduled for and what it needs."""
+    columns = [column for column in COLUMNS if column.key in _IN_SUMMARY]
+    system = review.schedule.system
+    load = columns[0].quantity.unit(system)
+    headings = ("Tag", "Status", "Governing", f"Total {load}", *(
+        _heading(column.label, column.quantity.unit(system)) for column in columns
+    ))  # fmt: skip
+    rows = tuple(tuple(_unit_cells(unit)) for unit in review.units.values())
+    return Table(headings, rows, frozenset(range(3, len(headings))))
+
+
+def _heading(label: str, unit: str) -> str:
+    short = label.removeprefix("Cooling ").removeprefix("total ").removeprefix("tons ")
+    short = {"Sensible heat ratio": "SHR"}.get(short, short.capitalize())
+    return f"{short} {unit}".strip()
+
+
+def _unit_cells(reviewed: UnitReview) -> Iterator[str]:
+    case = reviewed.case
+    governing = known(lambda: case.governing)
+    yield reviewed.label
+    yield reviewed.status
+    yield governing.name if governing else _NOTHING
+    cell = reviewed.unit.typed(Unit.cool_total.key)
+    yield cell.text if cell else _NOTHING
+    for column in COLUMNS:
+        if column.key in _IN_SUMMARY:
+            value = known(column.get, case)
+            digits = column.quantity.digits(case.site.system)
+            yield _NOTHING if value is None else format_number(value, digits)

@@ -1,0 +1,1 @@
+"""How a page looks in each format; a format renders any page."""

@@ -1,0 +1,71 @@
+"""A page as plain text for a terminal, 80 columns wide."""
+
+from __future__ import annotations
+
+import textwrap
+from typing import TYPE_CHECKING
+
+from schedtui.report.page import Block, Entries, Heading, Page, Paragraph, Table
+from schedtui.text_width import cut, fill, visible, width_of
+
+if TYPE_CHECKING:
+    from collections.abc import Iterable, Iterator
+
+WIDTH = 80
+_LABEL_WIDTH = 16
+_LONGEST_CELL = 24
+_GAP = "  "
+
+
+def render(page: Page) -> str:
+    """Return the page as text, ending with a line break."""
+    parts = ["\n".join(_block(block)) for block in page.blocks]
+    return "\n\n".join(part for part in parts if part) + "\n"
+
+
+def _block(block: Block) -> Iterable[str]:
+    match block:
+        case Heading(text, level):
+            return _heading(visible(text), level)
+        case Paragraph(text):
+            return _wrapped(visible(text), WIDTH)
+        case Entries(entries):
+            return (line for one in entries for line in _entry(one.label, one.head, one.lines))
+        case Table():
+            return _table(block)
+
+
+def _heading(text: str, level: int) -> Iterator[str]:
+    yield cut(text, WIDTH)
+    if level == 1:
+        yield "=" * min(width_of(text), WIDTH)
+
+
+def _entry(label: str, head: str, lines: tuple[str, ...]) -> Iterator[str]:
+    """Give the label its column; what is too long for it has the line to itself."""
+    shown = visible(label)
+    room = WIDTH - _LABEL_WIDTH
+    first, *rest = _wrapped(visible(head), room) or [""]
+    if width_of(shown) < _LABEL_WIDTH:
+        yield fill(shown, _LABEL_WIDTH) + first
+    else:
+        yield cut(shown, WIDTH)
+        yield " " * _LABEL_WIDTH + first
+    for line in rest + [part for text in lines for part in _wrapped(visible(text), room)]:
+        yield " " * _LABEL_WIDTH + line
+
+
+def _table(table: Table) -> Iterator[str]:
+    rows = [tuple(cut(visible(cell), _LONGEST_CELL) for cell in row) for row in table.rows]
+    headings = tuple(cut(visible(one), _LONGEST_CELL) for one in table.headings)
+    widths = [max(map(width_of, column)) for column in zip(headings, *rows, strict=True)]
+    for row in (headings, *rows):
+        cells = (
+            fill(cell, width, "right" if place in table.numeric else "left")
+            for place, (cell, width) in enumerate(zip(row, widths, strict=True))
+        )
+        yield _GAP.join(cells).rstrip()
+
+
+def _wrapped(text: str, width: int) -> list[str]:
+    return textwrap.wrap(text, width, break_on_hyphens=False)

@@ -1,0 +1,111 @@
+"""A review as the JSON that scripts read: full precision, project units, absent keys absent."""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING, Any
+
+from schedtui.report.page import CAUTION
+from schedtui.review.cooling import Cooling
+from schedtui.review.figure import known
+from schedtui.review.quantities import COOLING_FIGURES, COOLING_STATES, HEATING_STATES
+from schedtui.schedule.load import FORMAT
+
+if TYPE_CHECKING:
+    from schedtui.air.state import State
+    from schedtui.review.finding import Finding
+    from schedtui.review.heating import Heating
+    from schedtui.review.reviewed import Review, UnitReview
+
+_PROPERTIES = ("db", "wb", "dp", "rh", "w", "h", "v")
+
+
+def review_object(review: Review, file: str) -> dict[str, Any]:
+    """Return a review as an object of JSON.
+
+    Args:
+        review: the review.
+        file: the file's name as the person gave it.
+    """
+    project, totals = review.schedule.project, review.totals()
+    return {
+        "file": file,
+        "format": FORMAT,
+        "project": {
+            "title": project.title,
+            "units": review.schedule.system,
+            "pressure": review.site.air.pressure,
+        },
+        "counts": review.counts(),
+        "units": [_unit(unit) for unit in review.units.values()],
+        "plants": [],
+        "findings": [_finding(one) for one in review.findings],
+        "totals": {
+            "tons": totals.tons,
+            "supply_airflow": totals.supply_airflow,
+            "outdoor_airflow": totals.outdoor_airflow,
+        },
+        "caution": CAUTION,
+    }
+
+
+def _unit(reviewed: UnitReview) -> dict[str, Any]:
+    case = reviewed.case
+    made: dict[str, Any] = {"tag": reviewed.unit.tag, "status": reviewed.status}
+    for key, at in (
+        ("governing", known(lambda: case.governing)),
+        ("rated", known(lambda: case.rated)),
+    ):
+        if at is not None:
+            made[key] = at.name
+    made["conditions"] = {
+        at.name: _cooling(at) if isinstance(at, Cooling) else _heating(at)
+        for at in case.evaluations
+    }
+    made["findings"] = [_finding(one) for one in reviewed.findings]
+    return made
+
+
+def _cooling(at: Cooling) -> dict[str, Any]:
+    figures = {
+        figure.key: value
+        for figure in COOLING_FIGURES
+        if (value := known(figure.get, at)) is not None
+    }
+    return {"season": "cooling", **_states(at, COOLING_STATES), **figures}
+
+
+def _heating(at: Heating) -> dict[str, Any]:
+    return {"season": "heating", **_states(at, HEATING_STATES)}
+
+
+def _states(at: object, names: tuple[tuple[str, str], ...]) -> dict[str, Any]:
+    return {
+        name: state_object(state)
+        for name, attribute in names
+        if (state := known(getattr, at, attribute)) is not None
+    }
+
+
+def state_object(state: State) -> dict[str, float]:
+    """Return a state of air as an object of JSON; properties it does not have are left out."""
+    return {
+        name: value for name in _PROPERTIES if (value := known(getattr, state, name)) is not None
+    }
+
+
+def _finding(finding: Finding) -> dict[str, Any]:
+    made: dict[str, Any] = {"check": finding.check, "severity": finding.severity.word}
+    if finding.condition is not None:
+        made["condition"] = finding.condition
+    made["fields"] = list(finding.paths)
+    for key in ("scheduled", "required", "margin"):
+        value = getattr(finding, key)
+        if value is not None:
+            made[key] = value
+    if finding.unit and finding.scheduled is not None:
+        made["unit"] = finding.unit
+    made["message"] = finding.message
+    made["accepted"] = finding.accepted
+    if finding.rounding:
+        made["rounding"] = True
+    return made

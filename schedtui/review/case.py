@@ -1,0 +1,199 @@
+"""What a check is given: a unit with its evaluations, a condition, the whole schedule."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+from typing import TYPE_CHECKING
+
+from schedtui.errors import Absent
+from schedtui.review.cooling import Cooling, outdoor_air
+from schedtui.review.figure import figure, known
+from schedtui.review.heating import Heating
+from schedtui.review.row import RowCoil
+from schedtui.schedule.catalogue.condition import Condition
+from schedtui.schedule.typed import Typed
+
+if TYPE_CHECKING:
+    from collections.abc import Iterator, Mapping
+
+    from schedtui.air.state import State
+    from schedtui.review.site import Site
+    from schedtui.schedule.catalogue.unit import Unit
+    from schedtui.schedule.view import Schedule
+
+# A unit without outdoor air needs no condition; where the file has none it is computed at this.
+_ROOM_CONDITION = {
+    "name": Typed("room", "room", '"room"'),
+    "season": Typed("cooling", "cooling", '"cooling"'),
+}
+_FULL_LOAD = 100.0
+_NEAREST = 3.0  # a rated condition's entering air lies within so many limits of the scheduled one
+
+
+class UnitCase:
+    """A unit, evaluated at every condition that applies to it.
+
+    Args:
+        unit: the unit as scheduled.
+        schedule: the schedule it stands in.
+        site: where it stands.
+    """
+
+    def __init__(self, unit: Unit, schedule: Schedule, site: Site) -> None:
+        self.unit = unit
+        self.schedule = schedule
+        self.site = site
+
+    @figure
+    def conditions(self) -> tuple[Condition, ...]:
+        """The conditions that apply to the unit, in file order."""
+        named = self.unit.conditions
+        conditions = self.schedule.conditions
+        if not conditions and not self.unit.outdoor_airflow:
+            return (Condition(0, self.site.system, _ROOM_CONDITION),)
+        return tuple(one for one in conditions if named is None or one.name in named)
+
+    @figure
+    def row(self) -> RowCoil:
+        """The cooling coil as the row's own numbers have it."""
+        return RowCoil(self.unit, self.site)
+
+    @figure
+    def evaluations(self) -> tuple[Cooling | Heating, ...]:
+        """The unit at each condition that applies, in file order."""
+        return tuple(
+            (Cooling if one.season == "cooling" else Heating)(self.unit, one, self.site)
+            for one in self.conditions
+        )
+
+    @property
+    def cooling(self) -> tuple[Cooling, ...]:
+        """The unit at each of its cooling conditions."""
+        return tuple(at for at in self.evaluations if isinstance(at, Cooling))
+
+    @property
+    def heating(self) -> tuple[Heating, ...]:
+        """The unit at each of its heating conditions."""
+        return tuple(at for at in self.evaluations if isinstance(at, Heating))
+
+    @figure
+    def governing(self) -> Cooling:
+        """The cooling condition with the greatest coil total, the first of equals."""
+        totals = [(known(_coil_total, at), at) for at in self.cooling]
+        computed = [(total, at) for total, at in totals if total is not None]
+        if not computed:
+            raise self._no_coil()
+        return max(computed, key=lambda pair: pair[0])[1]
+
+    @figure
+    def rated(self) -> Cooling:
+        """The cooling condition that the scheduled capacity was rated at.
+
+        Of those at full load the one whose air entering the coil is nearest the scheduled entering
+        state; the governing one where no such state is scheduled.
+        """
+        if not self.unit.stated("cool_eat_db") and not self.unit.stated("cool_eat_wb"):
+            return self.governing
+        full = [
+            (distance, at)
+            for at in self.cooling
+            if at.condition.sensible_load == at.condition.latent_load == _FULL_LOAD
+            and (distance := known(self._distance, at)) is not None
+        ]
+        if not full:
+            raise self._no_coil()
+        distance, nearest = min(full, key=lambda pair: pair[0])
+        if distance >= _NEAREST:
+            raise Absent(why="no full-load condition has the scheduled air entering the coil")
+        return nearest
+
+    def _distance(self, at: Cooling) -> float:
+        """Return how far the computed entering air is from the scheduled, in limits."""
+        unit, limits, computed = self.unit, self.site.limits, at.coil_entering
+        parts = []
+        if unit.cool_eat_db is not None:
+            parts.append(abs(unit.cool_eat_db - computed.db) / limits.entering_db)
+        if unit.cool_eat_wb is not None:
+            parts.append(abs(unit.cool_eat_wb - computed.wb) / limits.entering_wb)
+        return max(parts)
+
+    def _no_coil(self) -> Absent:
+        """Return why no cooling condition gives a coil load."""
+        if not self.cooling:
+            return Absent(why="no cooling condition applies")
+        for at in self.cooling:
+            try:
+                at.coil  # noqa: B018  asked for its absence
+            except Absent as absent:
+                return absent
+        return Absent(why="no cooling condition is at full load")
+
+
+@dataclass(frozen=True, slots=True)
+class ConditionCase:
+    """A condition at the site.
+
+    Args:
+        condition: the condition as typed.
+        site: where it holds.
+    """
+
+    condition: Condition
+    site: Site
+
+    @property
+    def outdoor(self) -> State:
+        """Its outdoor air.
+
+        Raises:
+            Absent: not stated.
+            AirError: no such air.
+        """
+        return outdoor_air(self.condition, self.site)
+
+
+@dataclass(frozen=True, slots=True)
+class ScheduleCase:
+    """The schedule as a whole.
+
+    Args:
+        schedule: its rows.
+        site: where it stands.
+    """
+
+    schedule: Schedule
+    site: Site
+
+    def units_by_tag(self) -> Mapping[str, list[Unit]]:
+        """Return the units of each tag, in file order."""
+        found: dict[str, list[Unit]] = {}
+        for unit in self.schedule.units:
+            if unit.tag is not None:
+                found.setdefault(unit.tag, []).append(unit)
+        return found
+
+
+def _coil_total(at: Cooling) -> float:
+    return at.coil.total
+
+
+def labels(units: tuple[Unit, ...]) -> Iterator[tuple[int, str]]:
+    """Name each unit as messages do: by its tag, "AHU-1 (2nd)" when used again, "unit 3" without.
+
+    Yields:
+        Row id and label.
+    """
+    seen: dict[str, int] = {}
+    for place, unit in enumerate(units, start=1):
+        if unit.tag is None:
+            yield unit.row_id, f"unit {place}"
+            continue
+        times = seen[unit.tag] = seen.get(unit.tag, 0) + 1
+        yield unit.row_id, unit.tag if times == 1 else f"{unit.tag} ({_ordinal(times)})"
+
+
+def _ordinal(number: int) -> str:
+    """Return 2nd, 3rd, 4th, …, 11th, …, 22nd."""
+    tens, ones = divmod(number, 10)
+    ending = {1: "st", 2: "nd", 3: "rd"}.get(ones, "th")
+    return f"{number}{'th' if tens % 10 == 1 else ending}"

@@ -1,0 +1,46 @@
+"""What a check is: a registration beside the functions that find its faults."""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Iterable
+from dataclasses import dataclass
+from typing import TYPE_CHECKING
+
+from schedtui.review.finding import Fault, Severity
+
+if TYPE_CHECKING:
+    from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
+    from schedtui.review.cooling import Cooling
+
+Faults = Iterable[Fault]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Check:
+    """A check's registration; each module of `review.checks` has one, called CHECK.
+
+    A finder is a pure function from what it is about to faults. It may ask for figures that are
+    not to be had: the judge turns that into a `missing` finding.
+
+    Args:
+        severity: the worst that it finds.
+        sentence: what it holds against what, in one plain sentence.
+        source: the standard or handbook behind it, or "common practice".
+        judges: the scheduled keys that it judges; where one of them is typed and the check cannot
+            be made, that is a finding.
+        unit: finds faults in a unit.
+        cooling: finds faults in a unit at each of its cooling conditions.
+        rated: finds faults in a unit at its rated cooling condition.
+        condition: finds faults in a condition.
+        schedule: finds faults in the schedule as a whole.
+    """
+
+    severity: Severity
+    sentence: str
+    source: str
+    judges: tuple[str, ...] = ()
+    unit: Callable[[UnitCase], Faults] | None = None
+    cooling: Callable[[Cooling], Faults] | None = None
+    rated: Callable[[Cooling], Faults] | None = None
+    condition: Callable[[ConditionCase], Faults] | None = None
+    schedule: Callable[[ScheduleCase], Faults] | None = None

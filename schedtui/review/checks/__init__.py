@@ -1,0 +1,1 @@
+"""The checks, one module each, named after the fault that it finds."""

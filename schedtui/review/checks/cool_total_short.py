@@ -1,0 +1,46 @@
+"""The scheduled total cooling capacity falls short of the coil's load.
+
+A coil that is too small lets the supply air rise and the room go humid on the very days it was
+bought for. Example: at 5 280 ft, 10 000 cfm of standard air from 80/67 to 55/54 °F needs some
+380 MBH; 340 scheduled is short by a tenth.
+
+The heat that leaves with the condensate is a further allowance: the handbook takes it off the
+load, practice mostly does not, and neither is a fault.
+"""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from schedtui.review.check import Check, Faults
+from schedtui.review.finding import Fault, Severity
+from schedtui.review.shortfall import is_short
+from schedtui.schedule.catalogue.unit import Unit
+from schedtui.units import LOAD
+
+if TYPE_CHECKING:
+    from schedtui.review.cooling import Cooling
+
+
+def find(at: Cooling) -> Faults:
+    """Hold the scheduled total against the coil's total at one condition."""
+    scheduled, required = at.unit.need(Unit.cool_total), at.required_total
+    limits = at.site.limits
+    allowed = required - at.coil.condensate_heat
+    if is_short(scheduled, allowed, limits.total_margin, limits.agreement):
+        yield Fault(
+            "scheduled total {scheduled}, the coil needs {required}",
+            ("cool_total",),
+            scheduled,
+            required,
+            LOAD,
+        )
+
+
+CHECK = Check(
+    severity=Severity.SHORT,
+    sentence="The scheduled cooling total carries the coil's load at every cooling condition.",
+    source="ASHRAE Handbook—Fundamentals, ch. 1 and ch. 18",
+    judges=("cool_total",),
+    cooling=find,
+)

@@ -1,0 +1,39 @@
+"""A unit states two keys of which one settles the other.
+
+Room humidity by relative humidity and by wet bulb, for one: which of the two was meant is not for
+a program to guess, so the figures that need it are absent.
+"""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING
+
+from schedtui.review.check import Check, Faults
+from schedtui.review.finding import Fault, Severity
+from schedtui.schedule.catalogue.unit import Unit
+
+if TYPE_CHECKING:
+    from schedtui.review.case import UnitCase
+
+
+def find(case: UnitCase) -> Faults:
+    """Look for alternatives of which more than one is stated."""
+    stated: dict[str, list[str]] = {}
+    for key, field in Unit.catalogue.items():
+        if field.instead_of is not None and case.unit.stated(key):
+            stated.setdefault(field.instead_of, []).append(key)
+    for what, keys in stated.items():
+        if len(keys) > 1:
+            yield Fault(
+                "{what} is stated by {keys}; one of them must go",
+                tuple(keys),
+                values={"what": what, "keys": " and ".join(keys)},
+            )
+
+
+CHECK = Check(
+    severity=Severity.CONFLICT,
+    sentence="Nothing is stated in two ways at once.",
+    source="by definition",
+    unit=find,
+)

@@ -1,0 +1,72 @@
+"""Figures of an evaluation: computed when first asked, remembered, absences included.
+
+An evaluation asks only for what someone wants to know, so a check costs what it reads and a row
+with gaps answers for everything that does not need them.
+"""
+
+from __future__ import annotations
+
+from typing import TYPE_CHECKING, Any, Generic, ParamSpec, Self, TypeVar, overload
+
+from schedtui.errors import Absent, AirError
+
+if TYPE_CHECKING:
+    from collections.abc import Callable
+
+P = ParamSpec("P")
+T = TypeVar("T")
+
+
+class figure(Generic[T]):  # noqa: N801  reads as a decorator beside `property`
+    """A method turned into a figure: an attribute that is computed once.
+
+    Asking may raise `Absent`, whenever the figure cannot be had: that too is remembered. Air that
+    cannot be is an absence with its reason.
+
+    Args:
+        method: computes the figure from its evaluation.
+    """
+
+    def __init__(self, method: Callable[[Any], T]) -> None:
+        self._method = method
+        self.__doc__ = method.__doc__
+
+    def __set_name__(self, owner: type, name: str) -> None:
+        """Remember the attribute's name, under which the evaluation keeps the result."""
+        self._name = name
+
+    @overload
+    def __get__(self, evaluation: None, owner: type) -> Self: ...
+    @overload
+    def __get__(self, evaluation: object, owner: type) -> T: ...
+    def __get__(self, evaluation: object | None, owner: type) -> Self | T:
+        """Return the figure.
+
+        Raises:
+            Absent: it cannot be had.
+        """
+        if evaluation is None:
+            return self
+        known: dict[str, T | Absent] = evaluation.__dict__.setdefault("_known", {})
+        if self._name not in known:
+            known[self._name] = self._compute(evaluation)
+        result = known[self._name]
+        if isinstance(result, Absent):
+            raise result.with_traceback(None)
+        return result
+
+    def _compute(self, evaluation: object) -> T | Absent:
+        try:
+            return self._method(evaluation)
+        except Absent as absent:
+            return absent
+        except AirError as error:
+            return Absent(why=str(error))
+
+
+def known(ask: Callable[P, T], *args: P.args, **kwargs: P.kwargs) -> T | None:
+    """Return what `ask` returns, None where it is absent or no air can have it."""
+    try:
+        return ask(*args, **kwargs)
+    except (Absent, AirError):
+        return None

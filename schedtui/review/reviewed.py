@@ -1,0 +1,188 @@
+"""A schedule reviewed: every unit with its findings, those of no unit, and the sums.
+
+After an edit only what it touches is reviewed again: a unit's row makes that unit and the sums
+new, anything else makes every unit new.
+"""
+
+from __future__ import annotations
+
+from collections import Counter
+from dataclasses import dataclass
+from typing import TYPE_CHECKING
+
+from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase, labels
+from schedtui.review.figure import known
+from schedtui.review.finding import Finding, Severity
+from schedtui.review.judge import judge_condition, judge_schedule, judge_unit
+from schedtui.review.site import Site, site_of
+
+if TYPE_CHECKING:
+    from collections.abc import Mapping
+
+    from schedtui.schedule.catalogue.unit import Unit
+    from schedtui.schedule.view import Schedule
+
+UNREADABLE = "unreadable"
+CLEAR = "clear"
+
+
+@dataclass(frozen=True, slots=True)
+class UnitReview:
+    """One unit, reviewed.
+
+    Args:
+        label: how messages name it.
+        case: the unit with its evaluations.
+        own: findings of the unit by itself, worst first.
+        shared: findings that only the whole schedule shows, a duplicate tag for one.
+    """
+
+    label: str
+    case: UnitCase
+    own: tuple[Finding, ...]
+    shared: tuple[Finding, ...] = ()
+
+    @property
+    def unit(self) -> Unit:
+        """The unit as scheduled."""
+        return self.case.unit
+
+    @property
+    def findings(self) -> tuple[Finding, ...]:
+        """All findings of the unit, worst first."""
+        if not self.shared:
+            return self.own
+        return tuple(sorted((*self.own, *self.shared), key=lambda finding: -finding.severity))
+
+    @property
+    def worst(self) -> Severity | None:
+        """The worst severity among findings that nobody has accepted."""
+        return max((one.severity for one in self.findings if not one.accepted), default=None)
+
+    @property
+    def status(self) -> str:
+        """The unit's state in one word."""
+        if any(self.unit.bad_keys()):
+            return UNREADABLE
+        return CLEAR if self.worst is None else self.worst.word
+
+
+@dataclass(frozen=True, slots=True)
+class Totals:
+    """Sums over the units, each times its quantity less what stands by.
+
+    Args:
+        tons: required tons, each unit at its own governing condition.
+        supply_airflow: [cfm | L/s] as typed.
+        outdoor_airflow: [cfm | L/s] as typed.
+    """
+
+    tons: float
+    supply_airflow: float
+    outdoor_airflow: float
+
+
+@dataclass(frozen=True, slots=True)
+class Review:
+    """A schedule, reviewed.
+
+    Args:
+        schedule: what was reviewed.
+        site: where its units stand.
+        units: the units' reviews by row id, in file order.
+        findings: those that belong to no unit and no plant, worst first.
+    """
+
+    schedule: Schedule
+    site: Site
+    units: Mapping[int, UnitReview]
+    findings: tuple[Finding, ...]
+
+    @property
+    def all_findings(self) -> tuple[Finding, ...]:
+        """Every finding there is."""
+        return (
+            *(one for unit in self.units.values() for one in unit.findings),
+            *self.findings,
+        )
+
+    def counts(self) -> dict[str, int]:
+        """Count findings by severity, clear units, accepted findings and rounding ones."""
+        found = self.all_findings
+        by_severity = Counter(one.severity for one in found if not one.accepted)
+        return {
+            "short": by_severity[Severity.SHORT],
+            "conflict": by_severity[Severity.CONFLICT],
+            "caution": by_severity[Severity.CAUTION],
+            "missing": by_severity[Severity.MISSING],
+            "clear": sum(unit.status == CLEAR for unit in self.units.values()),
+            "accepted": sum(one.accepted for one in found),
+            "rounding": sum(one.rounding and not one.accepted for one in found),
+        }
+
+    def totals(self) -> Totals:
+        """Return the project's sums."""
+        tons = supply = outdoor = 0.0
+        for reviewed in self.units.values():
+            unit = reviewed.unit
+            number = max(unit.quantity - unit.standby, 0)
+            tons += number * (known(_required_tons, reviewed.case) or 0.0)
+            supply += number * (unit.supply_airflow or 0.0)
+            outdoor += number * (unit.outdoor_airflow or 0.0)
+        return Totals(tons, supply, outdoor)
+
+
+def review(schedule: Schedule, previous: Review | None = None) -> Review:
+    """Review a schedule.
+
+    Args:
+        schedule: what to review.
+        previous: an earlier review of the same document, whose units serve again where nothing
+            that they depend on has changed.
+    """
+    site = site_of(schedule)
+    kept = previous.units if previous and _same_ground(previous, schedule, site) else {}
+    names = dict(labels(schedule.units))
+    own = {
+        unit.row_id: _review_unit(unit, schedule, site, names[unit.row_id], kept)
+        for unit in schedule.units
+    }
+    whole = judge_schedule(ScheduleCase(schedule, site), names)
+    for finding in whole:
+        if finding.subject.table == "unit":
+            row_id = finding.subject.row_id
+            shared = (*own[row_id].shared, finding)
+            own[row_id] = UnitReview(own[row_id].label, own[row_id].case, own[row_id].own, shared)
+    rest = [one for one in whole if one.subject.table != "unit"]
+    for condition in schedule.conditions:
+        rest += judge_condition(ConditionCase(condition, site))
+    rest.sort(key=lambda finding: -finding.severity)
+    return Review(schedule, site, own, tuple(rest))
+
+
+def _required_tons(case: UnitCase) -> float:
+    return case.governing.coil.tons
+
+
+def _same_ground(previous: Review, schedule: Schedule, site: Site) -> bool:
+    """Tell whether everything that all units depend on is as it was."""
+    before, now = previous.schedule.document, schedule.document
+    return (
+        previous.site.air == site.air
+        and before.system == now.system
+        and all(
+            before.single.get(name) == now.single.get(name)
+            for name in ("project", "limits", "defaults")
+        )
+        and all(before.rows(name) == now.rows(name) for name in ("column", "condition", "plant"))
+    )
+
+
+def _review_unit(
+    unit: Unit, schedule: Schedule, site: Site, label: str, kept: Mapping[int, UnitReview]
+) -> UnitReview:
+    before = kept.get(unit.row_id)
+    if before is not None and before.unit is unit and before.label == label:
+        return UnitReview(label, before.case, before.own)
+    case = UnitCase(unit, schedule, site)
+    return UnitReview(label, case, judge_unit(case, label))
