@@ -81,11 +81,12 @@ class ScheduleError(SchedtuiError):
 
     Args:
         problems: every problem found, in the order of their lines; never empty.
+        file: the file's name as the person gave it, where it is known.
     """
 
-    def __init__(self, problems: Sequence[Problem]) -> None:
-        """Keep the problems; the text of the exception is the first of them."""
+    def __init__(self, problems: Sequence[Problem], file: str = "") -> None:
         self.problems = tuple(problems)
+        self.file = file
         super().__init__(str(self.problems[0]))
 
 

@@ -52,8 +52,8 @@ def run(arguments: Sequence[str], open_screen: Callable[[str], int]) -> int:
     """
     try:
         return _dispatch(arguments, open_screen)
-    except ScheduleError as error:  # a command has said which file before
-        output.problems("", error.problems)
+    except ScheduleError as error:
+        output.problems(error.file, error.problems)
     except SchedtuiError as error:
         output.failure(str(error))
     except BrokenPipeError:

@@ -46,7 +46,7 @@ def findings_page(review: Review, file: str) -> Page:
         found = [one for one in review.all_findings if one.severity == severity]
         if found:
             blocks.append(Heading(f"{severity.word.capitalize()} ({len(found)})"))
-            blocks.append(Entries(tuple(map(_entry, found))))
+            blocks.append(Entries(tuple(finding_entry(one, one.subject.label) for one in found)))
     if review.units:
         blocks += [Heading("Units"), _summary(review)]
     return Page((*blocks, Paragraph(CAUTION)))
@@ -58,40 +58,69 @@ def site_line(review: Review) -> str:
     pressure = Measure(review.site.air.pressure, STATION_PRESSURE).text(system)
     where = f"station pressure {pressure}"
     if project.pressure is None:
-        altitude = project.altitude or 0.0
-        where = f"{Measure(altitude, ALTITUDE).text(system)} above sea level ({pressure})"
+        where = f"{_altitude(review)} above sea level ({pressure})"
     basis = "" if project.stated("airflow_basis") else ", by default"
     return f"{system} units, {where}, airflows {project.airflow_basis}{basis}"
+
+
+def short_site(review: Review) -> str:
+    """Say the same in as few words as it takes."""
+    system, project = review.schedule.system, review.schedule.project
+    pressure = Measure(review.site.air.pressure, STATION_PRESSURE).text(system)
+    where = _altitude(review) if project.pressure is None else pressure
+    return f"{system}  {where}  {project.airflow_basis} air"
+
+
+def _altitude(review: Review) -> str:
+    altitude = review.schedule.project.altitude or 0.0
+    return Measure(altitude, ALTITUDE).text(review.schedule.system)
 
 
 def counts_line(review: Review) -> str:
     """Say how much was found, by severity."""
     counts = review.counts()
     words = [f"{counts[severity.word]} {severity.word}" for severity in WORST_FIRST]
-    words += [f"{counts['clear']} units clear", f"{counts['accepted']} accepted"]
+    words += [f"{_number(counts['clear'], 'unit')} clear", f"{counts['accepted']} accepted"]
     if counts["rounding"]:
         words.append(f"{counts['rounding']} of the cautions within the printed digits")
     return ", ".join(words)
 
 
+def short_counts(review: Review) -> str:
+    """Say what was found by severity, in as few words as it takes."""
+    counts = review.counts()
+    words = [
+        f"{counts[severity.word]} {severity.word}"
+        for severity in WORST_FIRST
+        if counts[severity.word]
+    ]
+    return "  ".join(words) or "all clear"
+
+
+def _number(count: int, noun: str) -> str:
+    return f"{count} {noun}{'' if count == 1 else 's'}"
+
+
 def _sizes(review: Review) -> str:
-    units, conditions = len(review.units), len(review.schedule.conditions)
-    return (
-        f"{units} unit{'' if units == 1 else 's'}, "
-        f"{conditions} condition{'' if conditions == 1 else 's'}"
-    )
+    units = _number(len(review.units), "unit")
+    return f"{units}, {_number(len(review.schedule.conditions), 'condition')}"
 
 
-def _entry(finding: Finding) -> Entry:
+def finding_entry(finding: Finding, label: str) -> Entry:
+    """Return a finding as an entry of a list.
+
+    Args:
+        finding: the finding.
+        label: what stands before it: what it is about, or how bad it is.
+    """
     head = finding.check
-    subject = finding.subject
-    if finding.condition and subject.table == "unit":
+    if finding.condition and finding.subject.table == "unit":
         head += f" at {finding.condition}"
-    if finding.margin is not None and finding.scheduled is not None:
+    if finding.margin is not None:
         head += f", {finding.margin:+.1f} %"
     if finding.accepted:
         head += " (accepted)"
-    return Entry(subject.label, head, (finding.message,))
+    return Entry(label, head, (finding.message,))
 
 
 def _summary(review: Review) -> Table:

@@ -51,16 +51,23 @@ NAMES = {"unit": "tag", "condition": "name", "plant": "name", "column": "key", "
 _REFERRED = ("condition", "plant", "column")
 
 
-def load(text: str) -> Document:
+def load(text: str, file: str = "") -> Document:
     """Read a schedule file's text.
+
+    Args:
+        text: the text.
+        file: the file's name, for the exception.
 
     Raises:
         ScheduleError: it cannot be read as a schedule at all. Bad values do not raise: they are
             bad cells, and `problems` of the document names each.
     """
-    source = read_source(text)
-    _refuse_misshapen(source)
-    return _Reading(source, _system(source)).document()
+    try:
+        source = read_source(text)
+        _refuse_misshapen(source)
+        return _Reading(source, _system(source)).document()
+    except ScheduleError as error:
+        raise ScheduleError(error.problems, file) from None
 
 
 def _refuse_misshapen(source: Source) -> None:

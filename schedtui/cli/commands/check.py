@@ -51,7 +51,7 @@ def run(asked: argparse.Namespace) -> ExitStatus:
             reviewed.append((file, check_file(file)))
         except ScheduleError as error:
             failed = True
-            output.problems(file, error.problems)
+            output.problems(error.file, error.problems)
         except FileError as error:
             failed = True
             output.failure(str(error))
@@ -71,9 +71,9 @@ def check_file(file: str) -> Review:
         FileError: it cannot be read.
         ScheduleError: it has anything in it that cannot be read as a schedule.
     """
-    document = load(read_text(Path(file)).text)
+    document = load(read_text(Path(file)).text, file)
     if document.problems:
-        raise ScheduleError(document.problems)
+        raise ScheduleError(document.problems, file)
     return review(view(document))
 
 

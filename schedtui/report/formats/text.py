@@ -5,7 +5,7 @@ from __future__ import annotations
 import textwrap
 from typing import TYPE_CHECKING
 
-from schedtui.report.page import Block, Entries, Heading, Page, Paragraph, Table
+from schedtui.report.page import Block, Entries, Entry, Heading, Page, Paragraph, Table
 from schedtui.text_width import cut, fill, visible, width_of
 
 if TYPE_CHECKING:
@@ -19,39 +19,39 @@ _GAP = "  "
 
 def render(page: Page) -> str:
     """Return the page as text, ending with a line break."""
-    parts = ["\n".join(_block(block)) for block in page.blocks]
+    parts = ["\n".join(block_lines(block, WIDTH)) for block in page.blocks]
     return "\n\n".join(part for part in parts if part) + "\n"
 
 
-def _block(block: Block) -> Iterable[str]:
+def block_lines(block: Block, width: int) -> Iterable[str]:
+    """Return the lines of one block; only a table's may be longer than `width`."""
     match block:
         case Heading(text, level):
-            return _heading(visible(text), level)
+            return _heading(visible(text), level, width)
         case Paragraph(text):
-            return _wrapped(visible(text), WIDTH)
+            return _wrapped(visible(text), width)
         case Entries(entries):
-            return (line for one in entries for line in _entry(one.label, one.head, one.lines))
+            return (line for one in entries for line in _entry(one, width))
         case Table():
             return _table(block)
 
 
-def _heading(text: str, level: int) -> Iterator[str]:
-    yield cut(text, WIDTH)
+def _heading(text: str, level: int, width: int) -> Iterator[str]:
+    yield cut(text, width)
     if level == 1:
-        yield "=" * min(width_of(text), WIDTH)
+        yield "=" * min(width_of(text), width)
 
 
-def _entry(label: str, head: str, lines: tuple[str, ...]) -> Iterator[str]:
+def _entry(entry: Entry, width: int) -> Iterator[str]:
     """Give the label its column; what is too long for it has the line to itself."""
-    shown = visible(label)
-    room = WIDTH - _LABEL_WIDTH
-    first, *rest = _wrapped(visible(head), room) or [""]
+    shown, room = visible(entry.label), width - _LABEL_WIDTH
+    first, *rest = _wrapped(visible(entry.head), room) or [""]
     if width_of(shown) < _LABEL_WIDTH:
         yield fill(shown, _LABEL_WIDTH) + first
     else:
-        yield cut(shown, WIDTH)
+        yield cut(shown, width)
         yield " " * _LABEL_WIDTH + first
-    for line in rest + [part for text in lines for part in _wrapped(visible(text), room)]:
+    for line in rest + [part for text in entry.lines for part in _wrapped(visible(text), room)]:
         yield " " * _LABEL_WIDTH + line
 
 
