@@ -19,6 +19,8 @@ if TYPE_CHECKING:
 
     from schedtui.schedule.typed import Typed
 
+# Where a table that is not there yet goes.
+_ORDER = ("format", "project", "limits", "defaults", *ARRAYS, "record")
 _NO_CELLS: Mapping[str, Typed] = {}
 
 
@@ -39,7 +41,7 @@ def source_text(document: Document) -> str:
                 changes += _differences(row, (table, index))
         else:
             changes.append(Arrange(table, tuple(_piece(document, table, row) for row in rows)))
-    return splice(document.source, changes) if changes else document.source.text
+    return splice(document.source, changes, order=_ORDER) if changes else document.source.text
 
 
 def saved(document: Document, text: str) -> Document:

@@ -163,7 +163,7 @@ class Session:
         """
         text = source_text(self._document)
         document = saved(self._document, text)
-        self._stamp = write_text(self.path, text, self._stamp, replace=True)
+        self._stamp = write_text(self.path, text, self._stamp)
         self._become(document)
         self._saved_at = self.history.last
 
