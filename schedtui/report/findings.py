@@ -18,14 +18,20 @@ from schedtui.review.figure import known
 from schedtui.review.finding import WORST_FIRST, Finding, Measure
 from schedtui.review.quantities import COLUMNS
 from schedtui.schedule.catalogue.unit import Unit
-from schedtui.units import ALTITUDE, STATION_PRESSURE, format_number
+from schedtui.units import ALTITUDE, LOAD, STATION_PRESSURE, format_number
 
 if TYPE_CHECKING:
     from collections.abc import Iterator
 
     from schedtui.review.reviewed import Review, UnitReview
 
-_IN_SUMMARY = ("total_required", "total_margin", "shr", "tons_required")
+# Computed columns of the summary, with headings short enough for 80 columns.
+_IN_SUMMARY = {
+    "total_required": "Required",
+    "total_margin": "Margin %",
+    "tons_required": "Tons",
+    "shr": "SHR",
+}
 _NOTHING = "-"
 
 
@@ -48,7 +54,11 @@ def findings_page(review: Review, file: str) -> Page:
             blocks.append(Heading(f"{severity.word.capitalize()} ({len(found)})"))
             blocks.append(Entries(tuple(finding_entry(one, one.subject.label) for one in found)))
     if review.units:
-        blocks += [Heading("Units"), _summary(review)]
+        load = LOAD.unit(review.schedule.system)
+        blocks += [
+            Heading(f"Units: cooling total in {load}, at the governing condition"),
+            _summary(review),
+        ]
     return Page((*blocks, Paragraph(CAUTION)))
 
 
@@ -125,20 +135,9 @@ def finding_entry(finding: Finding, label: str) -> Entry:
 
 def _summary(review: Review) -> Table:
     """Return one line a unit: what it is scheduled for and what it needs."""
-    columns = [column for column in COLUMNS if column.key in _IN_SUMMARY]
-    system = review.schedule.system
-    load = columns[0].quantity.unit(system)
-    headings = ("Tag", "Status", "Governing", f"Total {load}", *(
-        _heading(column.label, column.quantity.unit(system)) for column in columns
-    ))  # fmt: skip
+    headings = ("Tag", "Status", "Governing", "Scheduled", *_IN_SUMMARY.values())
     rows = tuple(tuple(_unit_cells(unit)) for unit in review.units.values())
     return Table(headings, rows, frozenset(range(3, len(headings))))
-
-
-def _heading(label: str, unit: str) -> str:
-    short = label.removeprefix("Cooling ").removeprefix("total ").removeprefix("tons ")
-    short = {"Sensible heat ratio": "SHR"}.get(short, short.capitalize())
-    return f"{short} {unit}".strip()
 
 
 def _unit_cells(reviewed: UnitReview) -> Iterator[str]:
@@ -149,8 +148,9 @@ def _unit_cells(reviewed: UnitReview) -> Iterator[str]:
     yield governing.name if governing else _NOTHING
     cell = reviewed.unit.typed(Unit.cool_total.key)
     yield cell.text if cell else _NOTHING
-    for column in COLUMNS:
-        if column.key in _IN_SUMMARY:
-            value = known(column.get, case)
-            digits = column.quantity.digits(case.site.system)
-            yield _NOTHING if value is None else format_number(value, digits)
+    columns = {column.key: column for column in COLUMNS}
+    for key in _IN_SUMMARY:
+        column = columns[key]
+        value = known(column.get, case)
+        digits = column.quantity.digits(case.site.system)
+        yield _NOTHING if value is None else format_number(value, digits)
