@@ -37,6 +37,7 @@ _PROPERTIES: tuple[tuple[str, str, Quantity], ...] = (
 )
 _STATE_LABELS = {
     "outdoor": "outdoor",
+    "recovered": "recovered",
     "return": "return",
     "mixed": "mixed",
     "coil_entering": "coil entering",

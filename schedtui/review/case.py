@@ -6,7 +6,8 @@ from dataclasses import dataclass
 from typing import TYPE_CHECKING
 
 from schedtui.errors import Absent
-from schedtui.review.cooling import Cooling, outdoor_air
+from schedtui.review.airpath import outdoor_air
+from schedtui.review.cooling import Cooling
 from schedtui.review.figure import figure, known
 from schedtui.review.heating import Heating
 from schedtui.review.row import RowCoil
@@ -56,7 +57,7 @@ class UnitCase:
     @figure
     def row(self) -> RowCoil:
         """The cooling coil as the row's own numbers have it."""
-        return RowCoil(self.unit, self.site)
+        return RowCoil(self.unit, Condition(0, self.site.system, _ROOM_CONDITION), self.site)
 
     @figure
     def evaluations(self) -> tuple[Cooling | Heating, ...]:

@@ -1,12 +1,11 @@
 """A unit's air at one cooling condition: from outdoors through the coil to the room.
 
-Composes what `air` computes in the order of the air path. Each state and number is a figure:
-computed when first asked for, absent with the keys that would give it. Judges nothing.
+Composes what `air` computes in the order that the air takes. Judges nothing.
 """
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING, cast
+from typing import TYPE_CHECKING, Literal
 
 from schedtui.air import fan
 from schedtui.air.coil import (
@@ -16,62 +15,35 @@ from schedtui.air.coil import (
     bypass_factor,
     coil_leaving,
     coil_load,
+    heating_load,
     leaving_of,
 )
-from schedtui.air.flow import AirflowBasis, dry_air_mass, volume_flow
-from schedtui.air.mixing import mix
-from schedtui.air.room import RoomMet, room_met
+from schedtui.air.flow import enthalpy_difference
+from schedtui.air.mixing import mix, unmix
+from schedtui.air.recovery import Effectiveness, recovered
+from schedtui.air.room import RoomMet, room_met, supply_for
 from schedtui.errors import Absent
+from schedtui.review.airpath import AirPath, humid_air
 from schedtui.review.figure import figure
-from schedtui.schedule.catalogue.condition import HUMIDITIES, Condition
-from schedtui.schedule.catalogue.field import Field
 from schedtui.schedule.catalogue.unit import Unit
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
-    from schedtui.air.step import Steps
-    from schedtui.review.site import Site
 
-Number = Field[float | None]
-
-_SETTLED = 1e-12  # relative change of the mass flow at which the actual basis has settled
-_MOST_TURNS = 100
+LeavingFrom = Literal["schedule", "loads", "room"]
+"""Where the coil's leaving state is from: dry and wet bulb as scheduled, the scheduled total and
+sensible with the dry bulb, or what the room's loads need."""
 
 
-class Cooling:
-    """One unit at one cooling condition.
+class Cooling(AirPath):
+    """One unit at one cooling condition."""
 
-    Args:
-        unit: the unit as scheduled.
-        condition: the design condition.
-        site: where the unit stands.
-        steps: a working to append to, in the order that figures are asked for.
-    """
-
-    def __init__(
-        self, unit: Unit, condition: Condition, site: Site, steps: Steps | None = None
-    ) -> None:
-        self.unit = unit
-        self.condition = condition
-        self.site = site
-        self.steps = steps
-
-    @property
-    def name(self) -> str:
-        """The condition's name."""
-        return self.condition.name or ""
-
-    # States of the air path
-
-    @figure
-    def outdoor(self) -> State:
-        """Outdoor air of the condition."""
-        return outdoor_air(self.condition, self.site)
+    # From outdoors to the mixed air
 
     @figure
     def room(self) -> State:
         """The room in cooling."""
-        return self._humid_air(Unit.room_db, Unit.room_rh, Unit.room_wb)
+        return humid_air(self.unit, self.site, Unit.room_db, Unit.room_rh, Unit.room_wb)
 
     @figure
     def return_air(self) -> State:
@@ -81,84 +53,277 @@ class Cooling:
             unit.refuse_bad(Unit.return_rise)
             return self.room.heated_to(self.room.db + unit.return_rise)
         if unit.stated("return_wb") or unit.stated("return_rh"):
-            return self._humid_air(Unit.return_db, Unit.return_rh, Unit.return_wb)
+            return humid_air(unit, self.site, Unit.return_db, Unit.return_rh, Unit.return_wb)
         return self.room.heated_to(unit.need(Unit.return_db))
+
+    @figure
+    def exhaust_mass(self) -> float:
+        """Dry air that leaves through the recovery; as much as enters where not given."""
+        self.unit.refuse_bad(Unit.exhaust_airflow)
+        airflow = self.unit.exhaust_airflow
+        if airflow is None:
+            return self.outdoor_mass
+        return self.mass_of(airflow, self.return_air.v if self.basis == "actual" else None)
+
+    @figure
+    def recovered(self) -> State:
+        """Outdoor air behind the energy recovery, which acts where it lowers the coil's load.
+
+        Raises:
+            Absent: the unit has no recovery, or takes no outdoor air.
+        """
+        unit = self.unit
+        unit.refuse_bad(Unit.recovery_sensible, Unit.recovery_latent)
+        unit.refuse_bad(Unit.recovery_basis)
+        sensible, latent = unit.recovery_sensible or 0.0, unit.recovery_latent or 0.0
+        if not (sensible or latent) or self.outdoor_mass == 0:
+            raise Absent("recovery_sensible", why="there is no energy recovery")
+        effectiveness = Effectiveness(sensible, latent, unit.recovery_basis == "least flow")
+        outdoor, exhaust = self.outdoor, self.return_air
+        after = recovered(
+            outdoor, self.outdoor_mass, exhaust, self.exhaust_mass, effectiveness, self.steps
+        )
+        pays = after.h < outdoor.h if latent else after.db < outdoor.db
+        return after if pays else outdoor
+
+    @figure
+    def intake(self) -> State:
+        """Outdoor air as it comes to be mixed: recovered where there is a recovery."""
+        has_recovery = self.unit.stated("recovery_sensible") or self.unit.stated("recovery_latent")
+        if not has_recovery or not (self.unit.recovery_sensible or self.unit.recovery_latent):
+            self.unit.refuse_bad(Unit.recovery_sensible, Unit.recovery_latent)
+            return self.outdoor
+        return self.recovered
 
     @figure
     def mixed(self) -> State:
         """Return and outdoor air, mixed."""
-        return self._mixed(self.supply_mass)
+        return self._mixed_with_return(self.supply_mass)
+
+    def _mixed_with_return(self, mass: float) -> State:
+        """Return all of the outdoor air mixed with what else makes up a mass."""
+        outdoor_mass = min(self.outdoor_mass, mass)
+        if outdoor_mass == 0:
+            return self.return_air
+        if outdoor_mass == mass:
+            return self.intake
+        return mix(self.intake, outdoor_mass, self.return_air, mass - outdoor_mass, self.steps)
+
+    # What goes around the coil
+
+    @figure
+    def bypass_share(self) -> float:
+        """Share of the supply air that goes around the coil, by mass."""
+        unit, share = self.unit, self.stated_bypass
+        unit.refuse_bad(Unit.bypass_source)
+        if share and unit.bypass_source == "return":
+            # Only what returns can go around: the rest of the air is outdoor air.
+            share = min(share, 1 - self.outdoor_fraction)
+        return share
+
+    @figure
+    def stated_bypass(self) -> float:
+        """Share of the supply air around the coil as stated, by the coil's airflow if that is."""
+        unit = self.unit
+        unit.refuse_bad(Unit.bypass, Unit.cool_airflow)
+        if unit.cool_airflow is not None:
+            return max(1 - unit.cool_airflow / self.supply_airflow, 0.0)
+        return (unit.bypass or 0.0) / 100
+
+    @figure
+    def bypass_mass(self) -> float:
+        """Dry air around the coil [lb/h | kg/s]."""
+        return self.bypass_share * self.supply_mass
+
+    @figure
+    def coil_mass(self) -> float:
+        """Dry air through the coil [lb/h | kg/s]."""
+        return self.supply_mass - self.bypass_mass
+
+    @figure
+    def bypassed(self) -> State:
+        """The air that goes around the coil."""
+        if self.unit.bypass_source == "return":
+            return self._past_blowing_fan(self.return_air)
+        return self._past_blowing_fan(self.mixed)
+
+    @figure
+    def to_coil(self) -> State:
+        """The air that goes to the coils: richer in outdoor air where return air bypasses."""
+        if self.bypass_mass and self.unit.bypass_source == "return":
+            return self._past_blowing_fan(self._mixed_with_return(self.coil_mass))
+        return self._past_blowing_fan(self.mixed)
+
+    def _past_blowing_fan(self, air: State) -> State:
+        # Each pound of air takes the same heat, so that no stream's share is lost.
+        return fan.after_fan(air, self.supply_mass, self.fan_heat) if self.blows_through else air
+
+    # The coils
+
+    @figure
+    def precooled(self) -> State:
+        """Air behind the first of two coils in series.
+
+        Raises:
+            Absent: there is only one.
+        """
+        unit = self.unit
+        lat_db, lat_wb = unit.need(Unit.precool_lat_db), unit.need(Unit.precool_lat_wb)
+        return coil_leaving(self.to_coil, self.site.air.by_wet_bulb(lat_db, lat_wb))[0]
+
+    @figure
+    def precool(self) -> CoilLoad:
+        """What the first of two coils takes out of the air."""
+        return coil_load(self.coil_mass, self.to_coil, self.precooled, self.steps)
 
     @figure
     def coil_entering(self) -> State:
-        """Air entering the coil: mixed, and warmed by a fan that blows through."""
-        return self._entering(self.supply_mass)
+        """Air entering the coil: past a first coil and the first side of a wrap-around."""
+        air = self.precooled if self._has_precool else self.to_coil
+        return air.heated_to(air.db - self.wrap) if self.wrap else air
+
+    @property
+    def _has_precool(self) -> bool:
+        return self.unit.stated("precool_lat_db") or self.unit.stated("precool_lat_wb")
+
+    @property
+    def wrap(self) -> float:
+        """Cooling before and warming behind the coil by a wrap-around recovery [°F | K]."""
+        self.unit.refuse_bad(Unit.wrap_drop)
+        return self.unit.wrap_drop or 0.0
+
+    @figure
+    def leaving_from(self) -> LeavingFrom:
+        """Where the coil's leaving state is from.
+
+        Raises:
+            Absent: nothing gives it.
+        """
+        unit = self.unit
+        if unit.stated("cool_lat_db", "cool_lat_wb"):
+            return "schedule"
+        if unit.stated("cool_lat_db", "cool_total", "cool_sensible"):
+            return "loads"
+        if unit.stated("room_sensible", "room_latent"):
+            return "room"
+        raise Absent(*(key for key in ("cool_lat_db", "cool_lat_wb") if not unit.stated(key)))
 
     @figure
     def scheduled_leaving(self) -> State:
-        """The coil's leaving state as scheduled, by its dry and wet bulb."""
+        """The leaving state as scheduled, wherever it is taken."""
         unit = self.unit
         lat_db, lat_wb = unit.need(Unit.cool_lat_db), unit.need(Unit.cool_lat_wb)
         return self.site.air.by_wet_bulb(lat_db, lat_wb)
 
     @figure
-    def leaving_is_derived(self) -> bool:
-        """Whether the leaving state follows from the scheduled total and sensible alone."""
-        loads = ("cool_lat_db", "cool_total", "cool_sensible")
-        return not self.unit.stated("cool_lat_wb") and self.unit.stated(*loads)
+    def leaving_aimed_at(self) -> State:
+        """The state that the coil is to leave the air in, at every condition."""
+        if self.leaving_from == "loads":
+            return self._left_by_loads()
+        if self.leaving_from == "room":
+            return self._back_to_coil(self._needed_by_room())
+        self.unit.refuse_bad(Unit.cool_lat_at)
+        if self.unit.cool_lat_at == "unit":
+            return self._back_to_coil(self.scheduled_leaving)
+        return self.scheduled_leaving
 
     @figure
     def coil_leaving(self) -> State:
         """Air leaving the coil at this condition."""
-        return self._leaving(self.supply_mass)[0]
+        return coil_leaving(self.coil_entering, self.leaving_aimed_at)[0]
 
     @figure
     def coil_mode(self) -> CoilMode:
         """Whether the coil runs wet, dry or not at all at this condition."""
-        return self._leaving(self.supply_mass)[1]
+        return coil_leaving(self.coil_entering, self.leaving_aimed_at)[1]
+
+    def _left_by_loads(self) -> State:
+        """Return the leaving state that the scheduled loads leave behind.
+
+        It follows from the row's own entering state if it has one, else from the computed one.
+        """
+        unit, entering = self.unit, self.coil_entering
+        if unit.stated("cool_eat_db", "cool_eat_wb"):
+            eat_db, eat_wb = unit.need(Unit.cool_eat_db), unit.need(Unit.cool_eat_wb)
+            entering = self.site.air.by_wet_bulb(eat_db, eat_wb)
+        fan_heat = self.fan_heat_at(entering) if unit.cool_basis == "net" else 0.0
+        total = unit.need(Unit.cool_total) + fan_heat
+        sensible = unit.need(Unit.cool_sensible) + fan_heat
+        return leaving_of(entering, self.coil_mass, unit.need(Unit.cool_lat_db), total, sensible)
+
+    def _needed_by_room(self) -> State:
+        """Return the air that the unit must deliver for the room's loads at this condition."""
+        unit, condition, mass = self.unit, self.condition, self.supply_mass
+        sensible = unit.need(Unit.room_sensible) * condition.sensible_load / 100
+        latent = unit.need(Unit.room_latent) * condition.latent_load / 100
+        # latent = m (h(t_room, W_room) − h(t_room, W_s)), solved for W_s
+        dry = self.room.at(w=0.0)
+        per_moisture = (self.room.h - dry.h) / self.room.w
+        w = self.room.w - enthalpy_difference(mass, latent, self.site.system) / per_moisture
+        unit.refuse_bad(Unit.duct_rise)
+        supply = supply_for(mass, self.room, sensible, w)
+        return supply.heated_to(supply.db - unit.duct_rise)
+
+    def _back_to_coil(self, leaving_unit: State) -> State:
+        """Return the coil's leaving state behind which the unit delivers a given one."""
+        air = leaving_unit if self.blows_through else self.before_fan(leaving_unit)
+        if self.bypass_mass:
+            air = unmix(air, self.supply_mass, self.bypassed, self.bypass_mass, self.steps)
+        return air.heated_to(air.db - self.wrap) if self.wrap else air
+
+    # From the coil to the room
+
+    @figure
+    def rejoined(self) -> State:
+        """Air behind the coil, warmed by a wrap-around and joined by what went around."""
+        air = self.coil_leaving
+        if self.wrap:
+            air = air.heated_to(air.db + self.wrap)
+        if not self.bypass_mass:
+            return air
+        return mix(air, self.coil_mass, self.bypassed, self.bypass_mass, self.steps)
+
+    @property
+    def fan_inlet(self) -> State:
+        """Air at the supply fan's inlet."""
+        return self.mixed if self.blows_through else self.rejoined
+
+    @figure
+    def before_reheat(self) -> State:
+        """Air that leaves the cooling part of the unit: past a fan that draws through."""
+        air = self.rejoined
+        return air if self.blows_through else air.heated_to(air.db + self.fan_rise)
+
+    @figure
+    def reheated(self) -> State:
+        """Air behind the reheat, which never cools."""
+        air = self.before_reheat
+        self.unit.refuse_bad(Unit.reheat_lat_db)
+        lat_db = self.unit.reheat_lat_db
+        return air if lat_db is None or lat_db <= air.db else air.heated_to(lat_db)
+
+    @figure
+    def reheat_load(self) -> float:
+        """Heat that the reheat puts into the supply air [MBH | kW].
+
+        Raises:
+            Absent: the unit is not scheduled to reheat.
+        """
+        self.unit.need(Unit.reheat_lat_db)
+        return heating_load(self.supply_mass, self.before_reheat, self.reheated.db, self.steps)
 
     @figure
     def supply(self) -> State:
-        """Air as it enters the room: past coil, draw-through fan and duct."""
-        unit, air = self.unit, self.coil_leaving
-        unit.refuse_bad(Unit.duct_rise)
-        if not self._blows_through:
-            air = air.heated_to(air.db + self.fan_rise)
-        return air.heated_to(air.db + unit.duct_rise)
-
-    # Flows
+        """Air as it enters the room, past the duct."""
+        self.unit.refuse_bad(Unit.duct_rise)
+        return self.reheated.heated_to(self.reheated.db + self.unit.duct_rise)
 
     @figure
-    def supply_mass(self) -> float:
-        """Dry air that the supply fan delivers [lb/h | kg/s]."""
-        airflow = self._supply_airflow
-        if self.basis != "actual":
-            return dry_air_mass(airflow, self.basis, self.site.air, steps=self.steps)
-        volume = self._settled_inlet_volume(airflow)
-        return dry_air_mass(airflow, self.basis, self.site.air, volume, self.steps)
+    def room_met(self) -> RoomMet:
+        """What the supply air does in the room."""
+        return room_met(self.supply_mass, self.supply, self.room, self.steps)
 
-    @figure
-    def outdoor_mass(self) -> float:
-        """Dry outdoor air taken in, at most what is supplied [lb/h | kg/s]."""
-        return self._outdoor_mass(self.supply_mass)
-
-    @figure
-    def outdoor_fraction(self) -> float:
-        """Share of outdoor air in the supply, by mass."""
-        return self.outdoor_mass / self.supply_mass
-
-    @figure
-    def coil_mass(self) -> float:
-        """Dry air through the coil [lb/h | kg/s]."""
-        return self.supply_mass
-
-    @figure
-    def basis(self) -> AirflowBasis:
-        """What the unit's airflows mean."""
-        self.unit.refuse_bad(Unit.airflow_basis)
-        return cast("AirflowBasis", self.unit.airflow_basis or self.site.airflow_basis)
-
-    # Coil
+    # The coil's load
 
     @figure
     def coil(self) -> CoilLoad:
@@ -167,15 +332,21 @@ class Cooling:
 
     @figure
     def required_total(self) -> float:
-        """Total load that a scheduled capacity is held against [MBH | kW]."""
-        self._refuse_derived_leaving()
-        return self.coil.total
+        """Total load that a scheduled capacity is held against, gross or net as it is stated."""
+        self.refuse_left_by_loads()
+        return self.coil.total - self.fan_heat_in_capacity
 
     @figure
     def required_sensible(self) -> float:
-        """Sensible load that a scheduled capacity is held against [MBH | kW]."""
-        self._refuse_derived_leaving()
-        return self.coil.sensible
+        """Sensible load that a scheduled capacity is held against, gross or net likewise."""
+        self.refuse_left_by_loads()
+        return self.coil.sensible - self.fan_heat_in_capacity
+
+    @figure
+    def fan_heat_in_capacity(self) -> float:
+        """Fan heat that a net capacity leaves out [MBH | kW]; 0 for a gross one."""
+        self.unit.refuse_bad(Unit.cool_basis)
+        return self.fan_heat if self.unit.cool_basis == "net" else 0.0
 
     @figure
     def shr(self) -> float:
@@ -188,7 +359,7 @@ class Cooling:
     @figure
     def adp(self) -> float:
         """Apparatus dew point [°F | °C]."""
-        self._refuse_derived_leaving()
+        self.refuse_left_by_loads()
         adp = apparatus_dew_point(self.coil_entering, self.coil_leaving, self.steps)
         if adp is None:
             raise Absent(why="the coil has no apparatus dew point")
@@ -199,169 +370,11 @@ class Cooling:
         """Bypass factor of the coil."""
         return bypass_factor(self.coil_entering, self.coil_leaving, self.adp, self.steps)
 
-    # Fan and room
+    def refuse_left_by_loads(self) -> None:
+        """Refuse to judge by a leaving state that follows from the scheduled loads themselves.
 
-    @figure
-    def fan_heat(self) -> float:
-        """Heat that the supply fan puts into the air [MBH | kW]; 0 where nothing gives it."""
-        return self._fan_heat(self.supply_mass, self._fan_inlet(self.supply_mass))
-
-    @figure
-    def fan_rise(self) -> float:
-        """Warming of the air by the supply fan [°F | K]."""
-        inlet = self._fan_inlet(self.supply_mass)
-        return fan.rise(inlet, self.supply_mass, self.fan_heat, self.steps)
-
-    @figure
-    def room_met(self) -> RoomMet:
-        """What the supply air does in the room."""
-        return room_met(self.supply_mass, self.supply, self.room, self.steps)
-
-    # Parts that depend on a supply mass which is perhaps not settled yet
-
-    @property
-    def _blows_through(self) -> bool:
-        self.unit.refuse_bad(Unit.fan_position)
-        return self.unit.fan_position == "blow-through"
-
-    @property
-    def _supply_airflow(self) -> float:
-        airflow = self.unit.need(Unit.supply_airflow)
-        if airflow == 0:
-            raise Absent("supply_airflow", why="the supply airflow is 0")
-        return airflow
-
-    def _outdoor_mass(self, supply_mass: float) -> float:
-        unit = self.unit
-        unit.refuse_bad(Unit.outdoor_airflow)
-        airflow = unit.outdoor_airflow or 0.0
-        if airflow == 0:
-            return 0.0
-        # Outdoor air equal to supply air as typed means all of it, whatever the volumes weigh;
-        # above that the share is held at 1, since nothing is extrapolated.
-        if airflow >= self._supply_airflow:
-            return supply_mass
-        volume = self.outdoor.v if self.basis == "actual" else None
-        return min(dry_air_mass(airflow, self.basis, self.site.air, volume), supply_mass)
-
-    def _mixed(self, supply_mass: float) -> State:
-        outdoor_mass = self._outdoor_mass(supply_mass)
-        if outdoor_mass == 0:
-            return self.return_air
-        if outdoor_mass == supply_mass:
-            return self.outdoor
-        return mix(self.outdoor, outdoor_mass, self.return_air, supply_mass - outdoor_mass)
-
-    def _entering(self, supply_mass: float) -> State:
-        mixed = self._mixed(supply_mass)
-        if not self._blows_through:
-            return mixed
-        return fan.after_fan(mixed, supply_mass, self._fan_heat(supply_mass, mixed))
-
-    def _leaving(self, supply_mass: float) -> tuple[State, CoilMode]:
-        entering = self._entering(supply_mass)
-        if self.leaving_is_derived:
-            return coil_leaving(entering, self._derived_leaving(entering, supply_mass))
-        return coil_leaving(entering, self.scheduled_leaving)
-
-    def _derived_leaving(self, entering: State, mass: float) -> State:
-        """Return the leaving state that the scheduled loads leave behind.
-
-        It follows from the row's own entering state if it has one, else from the computed one.
+        Raises:
+            Absent: it does.
         """
-        unit = self.unit
-        if unit.stated("cool_eat_db", "cool_eat_wb"):
-            eat_db, eat_wb = unit.need(Unit.cool_eat_db), unit.need(Unit.cool_eat_wb)
-            entering = self.site.air.by_wet_bulb(eat_db, eat_wb)
-        lat_db = unit.need(Unit.cool_lat_db)
-        total, sensible = unit.need(Unit.cool_total), unit.need(Unit.cool_sensible)
-        return leaving_of(entering, mass, lat_db, total, sensible)
-
-    def _fan_inlet(self, supply_mass: float) -> State:
-        if self._blows_through:
-            return self._mixed(supply_mass)
-        return self._leaving(supply_mass)[0]
-
-    def _fan_heat(self, supply_mass: float, inlet: State) -> float:
-        unit = self.unit
-        unit.refuse_bad(Unit.fan_rise, Unit.fan_power, Unit.fan_total_pressure, Unit.fan_efficiency)
-        if unit.fan_rise is not None:
-            return fan.heat_of_rise(inlet, supply_mass, unit.fan_rise, self.steps)
-        power = self._fan_power(supply_mass, inlet)
-        if power is None:
-            return 0.0
-        unit.refuse_bad(Unit.motor_efficiency)
-        efficiency = unit.motor_efficiency or self.site.limits.motor_efficiency
-        motor = efficiency if unit.motor_in_airstream else None
-        return fan.heat_to_air(power, self.site.system, motor, self.steps)
-
-    def _fan_power(self, supply_mass: float, inlet: State) -> float | None:
-        """Return the shaft power of the unit's supply fans, as stated or from their pressure."""
-        unit = self.unit
-        if unit.fan_power is not None:
-            return unit.fan_power * unit.fan_count
-        if unit.fan_total_pressure is None or unit.fan_efficiency is None:
-            return None
-        airflow = volume_flow(supply_mass, "actual", self.site.air, inlet.v)
-        return fan.shaft_power(
-            airflow, unit.fan_total_pressure, unit.fan_efficiency, self.site.system, self.steps
-        )
-
-    def _settled_inlet_volume(self, airflow: float) -> float:
-        """Return the specific volume at the supply fan's inlet [ft³/lb | m³/kg].
-
-        On the actual basis the supply volume is taken there, the state there may depend on the
-        share of outdoor air, and that on the supply mass.
-        """
-        guess = self.outdoor if self._takes_outdoor_air else self.return_air
-        volume = guess.v
-        quiet, self.steps = self.steps, None  # only the settled turn belongs in the working
-        try:
-            for _ in range(_MOST_TURNS):
-                before = volume
-                mass = dry_air_mass(airflow, "actual", self.site.air, volume)
-                volume = self._fan_inlet(mass).v
-                if abs(volume - before) <= _SETTLED * before:
-                    return volume
-        finally:
-            self.steps = quiet
-        raise Absent(why="the supply airflow's state at the fan does not settle")
-
-    @property
-    def _takes_outdoor_air(self) -> bool:
-        return bool(self.unit.outdoor_airflow)
-
-    def _humid_air(self, db: Number, rh: Number, wb: Number) -> State:
-        """Return the state of a dry bulb with either a relative humidity or a wet bulb."""
-        unit, air = self.unit, self.site.air
-        dry_bulb = unit.need(db)
-        if unit.stated(rh.key, wb.key):
-            raise Absent(rh.key, wb.key, why=f"{rh.key} and {wb.key} are both stated")
-        if unit.stated(wb.key):
-            return air.by_wet_bulb(dry_bulb, unit.need(wb))
-        return air.by_relative_humidity(dry_bulb, unit.need(rh))
-
-    def _refuse_derived_leaving(self) -> None:
-        if self.leaving_is_derived:
+        if self.leaving_from == "loads":
             raise Absent("cool_lat_wb")
-
-
-def outdoor_air(condition: Condition, site: Site) -> State:
-    """Return the outdoor air of a condition.
-
-    Raises:
-        Absent: its dry bulb or its humidity is not stated, or the humidity is stated twice.
-        AirError: there is no such air.
-    """
-    stated = [key for key in HUMIDITIES if condition.stated(key)]
-    if len(stated) != 1:
-        name = condition.name
-        raise Absent(*HUMIDITIES, why=f"condition {name} does not state one outdoor humidity")
-    dry_bulb = condition.need(Condition.outdoor_db)
-    if stated == ["outdoor_wb"]:
-        return site.air.by_wet_bulb(dry_bulb, condition.need(Condition.outdoor_wb))
-    if stated == ["outdoor_dp"]:
-        return site.air.by_dew_point(dry_bulb, condition.need(Condition.outdoor_dp))
-    if stated == ["outdoor_rh"]:
-        return site.air.by_relative_humidity(dry_bulb, condition.need(Condition.outdoor_rh))
-    return site.air.by_humidity_ratio(dry_bulb, condition.need(Condition.outdoor_w))

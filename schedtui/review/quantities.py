@@ -106,11 +106,16 @@ COOLING_FIGURES: tuple[Figure, ...] = (
            lambda at: at.room_met.sensible),
     Figure("room_latent_met", "Room latent met", LOAD, "supply and room air",
            lambda at: at.room_met.latent),
+    Figure("bypass", "Bypass", PERCENT, "bypass or coil airflow, as stated",
+           lambda at: at.bypass_share * 100),
+    Figure("reheat_load", "Reheat load", LOAD, "supply mass flow and the reheat's dry bulbs",
+           lambda at: at.reheat_load),
 )  # fmt: skip
 
 # The states of the air path by their names in the JSON, in the order that the air takes.
 COOLING_STATES: tuple[tuple[str, str], ...] = (
     ("outdoor", "outdoor"),
+    ("recovered", "recovered"),
     ("return", "return_air"),
     ("mixed", "mixed"),
     ("coil_entering", "coil_entering"),

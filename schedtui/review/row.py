@@ -1,63 +1,50 @@
 """What a unit's row says by itself: its own entering and leaving air and its airflow.
 
-Needs no condition. Judges nothing.
+The air path of `cooling` with the scheduled entering air in the place of the computed one. Needs
+no condition, and no rule for a coil that runs dry: the row says what it says. Judges nothing.
 """
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING, cast
+from typing import TYPE_CHECKING
 
-from schedtui.air.coil import CoilLoad, coil_load
-from schedtui.air.flow import AirflowBasis, dry_air_mass
-from schedtui.errors import Absent
+from schedtui.review.cooling import Cooling
 from schedtui.review.figure import figure
 from schedtui.schedule.catalogue.unit import Unit
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
-    from schedtui.review.site import Site
 
 
-class RowCoil:
-    """The cooling coil as the row's own numbers have it.
-
-    Args:
-        unit: the unit as scheduled.
-        site: where it stands.
-    """
-
-    def __init__(self, unit: Unit, site: Site) -> None:
-        self.unit = unit
-        self.site = site
+class RowCoil(Cooling):
+    """The cooling coil as the row's own numbers have it."""
 
     @figure
-    def entering(self) -> State:
+    def coil_entering(self) -> State:
         """Entering air as scheduled."""
         eat_db, eat_wb = self.unit.need(Unit.cool_eat_db), self.unit.need(Unit.cool_eat_wb)
         return self.site.air.by_wet_bulb(eat_db, eat_wb)
 
     @figure
-    def leaving(self) -> State:
-        """Leaving air as scheduled."""
-        lat_db, lat_wb = self.unit.need(Unit.cool_lat_db), self.unit.need(Unit.cool_lat_wb)
-        return self.site.air.by_wet_bulb(lat_db, lat_wb)
+    def bypassed(self) -> State:
+        """The air that goes around the coil: return air, else what enters the coil."""
+        if self.unit.bypass_source == "return":
+            return self.return_air
+        air = self.coil_entering
+        return air.heated_to(air.db + self.wrap) if self.wrap else air
 
     @figure
-    def mass(self) -> float:
-        """Dry air that the row's supply airflow holds [lb/h | kg/s]."""
-        unit = self.unit
-        airflow = unit.need(Unit.supply_airflow)
-        if airflow == 0:
-            raise Absent("supply_airflow", why="the supply airflow is 0")
-        unit.refuse_bad(Unit.airflow_basis)
-        basis = cast("AirflowBasis", unit.airflow_basis or self.site.airflow_basis)
-        volume = None
-        if basis == "actual":  # taken at the supply fan's inlet
-            blows = unit.fan_position == "blow-through"
-            volume = (self.entering if blows else self.leaving).v
-        return dry_air_mass(airflow, basis, self.site.air, volume)
+    def bypass_share(self) -> float:
+        """Share of the supply air around the coil, as stated: no condition bounds it."""
+        return self.stated_bypass
 
     @figure
-    def coil(self) -> CoilLoad:
-        """The load between the row's entering and leaving air."""
-        return coil_load(self.mass, self.entering, self.leaving)
+    def coil_leaving(self) -> State:
+        """Leaving air as scheduled, taken back to the coil."""
+        self.refuse_left_by_loads()
+        return self.leaving_aimed_at
+
+    @property
+    def fan_inlet(self) -> State:
+        """Air at the supply fan's inlet: in front of a blow-through fan, or behind the coil."""
+        return self.before_fan(self.coil_entering) if self.blows_through else self.rejoined

@@ -20,7 +20,7 @@ if TYPE_CHECKING:
 
 def find(case: UnitCase) -> Faults:
     """Hold the scheduled total against the row's own entering and leaving air."""
-    scheduled, own = case.unit.need(Unit.cool_total), case.row.coil.total
+    scheduled, own = case.unit.need(Unit.cool_total), case.row.required_total
     if scheduled < own * (1 - case.site.limits.row_balance / 100):
         yield Fault(
             "scheduled total {scheduled}, the row's own air and airflow give {required}",
