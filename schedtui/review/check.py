@@ -28,9 +28,12 @@ class Check:
         source: the standard or handbook behind it, or "common practice".
         judges: the scheduled keys that it judges; where one of them is typed and the check cannot
             be made, that is a finding.
+        explains: whether its fault tells why others stand, so that it is named before them.
+        reads_digits: whether the digits that numbers are printed with can explain its faults.
         unit: finds faults in a unit.
         cooling: finds faults in a unit at each of its cooling conditions.
         rated: finds faults in a unit at its rated cooling condition.
+        governing: finds faults in a unit at its governing cooling condition.
         condition: finds faults in a condition.
         schedule: finds faults in the schedule as a whole.
     """
@@ -39,8 +42,11 @@ class Check:
     sentence: str
     source: str
     judges: tuple[str, ...] = ()
+    explains: bool = False
+    reads_digits: bool = True
     unit: Callable[[UnitCase], Faults] | None = None
     cooling: Callable[[Cooling], Faults] | None = None
     rated: Callable[[Cooling], Faults] | None = None
+    governing: Callable[[Cooling], Faults] | None = None
     condition: Callable[[ConditionCase], Faults] | None = None
     schedule: Callable[[ScheduleCase], Faults] | None = None

@@ -9,7 +9,7 @@ from typing import TYPE_CHECKING
 from schedtui.units import Quantity, System, format_number
 
 if TYPE_CHECKING:
-    from collections.abc import Mapping
+    from collections.abc import Iterable, Mapping
 
 
 class Severity(IntEnum):
@@ -116,6 +116,7 @@ class Finding:
         unit: unit of both.
         accepted: whether a reviewer has accepted it.
         rounding: whether the printed digits alone can explain it.
+        explains: whether it tells why others stand.
     """
 
     check: str
@@ -130,11 +131,22 @@ class Finding:
     unit: str = ""
     accepted: bool = False
     rounding: bool = False
+    explains: bool = False
 
     @property
     def paths(self) -> tuple[str, ...]:
         """Where its fields stand, as scripts read it."""
         return tuple(map(self.subject.path, self.fields))
+
+
+def in_order(findings: Iterable[Finding]) -> tuple[Finding, ...]:
+    """Return findings in the order they are read: what explains others first, then worst first."""
+    return tuple(sorted(findings, key=_place))
+
+
+def _place(finding: Finding) -> tuple[bool, int]:
+    explains = finding.explains and not finding.rounding and finding.severity > Severity.MISSING
+    return not explains, -finding.severity
 
 
 def margin(scheduled: float, required: float) -> float | None:

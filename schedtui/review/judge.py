@@ -1,49 +1,50 @@
 """The judge: runs the checks over a case and makes findings of their faults.
 
 Alone in calling checks. Turns an absent figure into one `missing` finding where someone would
-expect the check, names what each finding is about, and puts the numbers into its sentence.
+expect the check, asks whether the printed digits explain a fault, and names what each finding is
+about.
 """
 
 from __future__ import annotations
 
-from dataclasses import dataclass, field
+from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING
 
-from schedtui.errors import Absent
+from schedtui.errors import Absent, AirError
+from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
 from schedtui.review.figure import known
-from schedtui.review.finding import Fault, Finding, Measure, Severity, Subject, margin
+from schedtui.review.finding import Fault, Finding, Severity, Subject, in_order, margin
 from schedtui.review.registry import registered
-from schedtui.schedule.catalogue.condition import Condition
-from schedtui.schedule.catalogue.project import Project
+from schedtui.review.rounding import explained_by_digits
+from schedtui.review.wording import band, lack, sentence
 from schedtui.schedule.load import CATALOGUES, NAMES
 
 if TYPE_CHECKING:
     from collections.abc import Callable, Iterator
 
-    from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
     from schedtui.review.check import Check, Faults
     from schedtui.review.cooling import Cooling
     from schedtui.schedule.catalogue.table import Table
-    from schedtui.units import System
+    from schedtui.schedule.catalogue.unit import Unit
 
 
-@dataclass(slots=True)
-class _Found:
-    """What one check gave over everything it was asked about."""
+@dataclass(frozen=True, slots=True)
+class _Asking:
+    """A check asked about one thing.
 
-    faults: list[tuple[str | None, Fault]] = field(default_factory=list)
-    absences: list[Absent] = field(default_factory=list)
+    Args:
+        condition: name of the condition it is asked at, if it is.
+        now: asks it about the unit as scheduled.
+        of: asks it about another reading of the unit.
+    """
 
-    def ask(self, condition: str | None, find: Callable[[], Faults]) -> None:
-        """Gather the faults of one call, or what it missed."""
-        try:
-            self.faults += [(condition, fault) for fault in find()]
-        except Absent as absent:
-            self.absences.append(absent)
+    condition: str | None
+    now: Callable[[], Faults]
+    of: Callable[[Unit], Faults]
 
 
 def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
-    """Return the findings of a unit, worst first.
+    """Return the findings of a unit, causes first and then worst first.
 
     Args:
         case: the unit with its evaluations.
@@ -52,27 +53,34 @@ def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
     subject = Subject("unit", case.unit.row_id, label)
     found: list[Finding] = []
     for name, check in registered().items():
-        asked = _ask_about_unit(check, case)
-        found += [
-            _finding(name, check, subject, fault, case.unit, condition)
-            for condition, fault in asked.faults
-        ]
-        if asked.absences and any(case.unit.stated(key) for key in check.judges):
-            found.append(_missing(name, subject, case.unit, asked.absences))
-    return _worst_first(found)
+        absences: list[Absent] = []
+        for asking in _askings(check, case):
+            try:
+                faults = list(asking.now())
+            except Absent as absent:
+                absences.append(absent)
+                continue
+            except AirError as error:
+                absences.append(Absent(why=str(error)))
+                continue
+            for fault in faults:
+                found += _judged(name, check, subject, case, fault, asking)
+        if absences and any(case.unit.stated(key) for key in check.judges):
+            message, keys = lack(absences, case.unit)
+            found.append(Finding(name, Severity.MISSING, subject, keys, message))
+    return in_order(found)
 
 
 def judge_condition(case: ConditionCase) -> tuple[Finding, ...]:
     """Return the findings of a condition by itself, worst first."""
     row = case.condition
     subject = Subject("condition", row.row_id, f"condition {row.name}")
-    found = [
+    return in_order(
         _finding(name, check, subject, fault, row, row.name)
         for name, check in registered().items()
         if check.condition is not None
         for fault in check.condition(case)
-    ]
-    return _worst_first(found)
+    )
 
 
 def judge_schedule(case: ScheduleCase, labels: dict[int, str]) -> tuple[Finding, ...]:
@@ -82,31 +90,48 @@ def judge_schedule(case: ScheduleCase, labels: dict[int, str]) -> tuple[Finding,
         case: the schedule.
         labels: how messages name each unit, by row id.
     """
-    found = [
+    return in_order(
         _finding(name, check, *_subject(case, fault, labels), None)
         for name, check in registered().items()
         if check.schedule is not None
         for fault in check.schedule(case)
-    ]
-    return _worst_first(found)
+    )
 
 
-def _ask_about_unit(check: Check, case: UnitCase) -> _Found:
-    found = _Found()
-    if check.unit is not None:
-        in_unit = check.unit
-        found.ask(None, lambda: in_unit(case))
+def _askings(check: Check, case: UnitCase) -> Iterator[_Asking]:
+    """Return everything that a check is to be asked about a unit, the governing condition first."""
+    if (in_unit := check.unit) is not None:
+        yield _Asking(
+            None,
+            lambda: in_unit(case),
+            lambda unit: in_unit(UnitCase(unit, case.schedule, case.site)),
+        )
     if check.cooling is not None:
-        at_each = check.cooling
         if not case.cooling:
-            found.absences.append(Absent(why="no cooling condition applies"))
-        for at in _governing_first(case):
-            found.ask(at.name, lambda at=at: at_each(at))  # type: ignore[misc]
+            yield _absent("no cooling condition applies")
+        yield from (_at(check.cooling, at) for at in _governing_first(case))
     if check.rated is not None:
-        at_rated = check.rated
-        rated = known(lambda: case.rated)
-        found.ask(rated.name if rated else None, lambda: at_rated(case.rated))
-    return found
+        yield _at_one(check.rated, lambda: case.rated)
+    if check.governing is not None:
+        yield _at_one(check.governing, lambda: case.governing)
+
+
+def _at(find: Callable[[Cooling], Faults], at: Cooling) -> _Asking:
+    return _Asking(at.name, lambda: find(at), lambda unit: find(at.of(unit)))
+
+
+def _at_one(find: Callable[[Cooling], Faults], ask: Callable[[], Cooling]) -> _Asking:
+    try:
+        return _at(find, ask())
+    except Absent as absent:
+        return _absent(absent.why, *absent.keys)
+
+
+def _absent(why: str, *keys: str) -> _Asking:
+    def missing(*_: object) -> Faults:
+        raise Absent(*keys, why=why)
+
+    return _Asking(None, missing, missing)
 
 
 def _governing_first(case: UnitCase) -> Iterator[Cooling]:
@@ -114,6 +139,25 @@ def _governing_first(case: UnitCase) -> Iterator[Cooling]:
     if governing is not None:
         yield governing
     yield from (at for at in case.cooling if at is not governing)
+
+
+def _judged(
+    name: str, check: Check, subject: Subject, case: UnitCase, fault: Fault, asking: _Asking
+) -> Iterator[Finding]:
+    """Return the finding of a fault: at full severity, milder within the digits, or none."""
+    finding = _finding(name, check, subject, fault, case.unit, asking.condition)
+    limits = case.site.limits
+    explained = None
+    if check.reads_digits:
+        explained = explained_by_digits(case.unit, fault, asking.of, limits.rounding_cap)
+    if explained is None:
+        yield finding
+        return
+    if finding.severity <= Severity.CAUTION:
+        return  # nothing is milder than a caution
+    severity = finding.severity if limits.rounding == "strict" else Severity.CAUTION
+    message = f"{finding.message}; {band(explained, fault, case.unit)}"
+    yield replace(finding, severity=severity, message=message, rounding=True)
 
 
 def _subject(
@@ -137,7 +181,6 @@ def _subject(
 def _finding(
     name: str, check: Check, subject: Subject, fault: Fault, row: Table, condition: str | None
 ) -> Finding:
-    system = row.system
     between = None
     if fault.scheduled is not None and fault.required is not None:
         between = margin(fault.scheduled, fault.required)
@@ -146,61 +189,11 @@ def _finding(
         severity=fault.severity or check.severity,
         subject=subject,
         fields=fault.fields,
-        message=fault.says.format_map(_words(fault, row)),
+        message=sentence(fault, row),
         condition=condition,
         scheduled=fault.scheduled,
         required=fault.required,
         margin=between,
-        unit=fault.quantity.unit(system) if fault.quantity else "",
+        unit=fault.quantity.unit(row.system) if fault.quantity else "",
+        explains=check.explains,
     )
-
-
-def _words(fault: Fault, row: Table) -> dict[str, str]:
-    """Return the words that a fault's sentence has places for."""
-    system = row.system
-    words = {
-        key: value.text(system) if isinstance(value, Measure) else value
-        for key, value in fault.values.items()
-    }
-    if fault.quantity is not None and fault.scheduled is not None:
-        words["scheduled"] = _as_typed(fault, row, system)
-    if fault.quantity is not None and fault.required is not None:
-        words["required"] = Measure(fault.required, fault.quantity).text(system)
-    return words
-
-
-def _as_typed(fault: Fault, row: Table, system: System) -> str:
-    """Return the scheduled number with the digits that stand in the schedule, if they do."""
-    assert fault.quantity is not None  # noqa: S101  the caller has looked
-    assert fault.scheduled is not None  # noqa: S101
-    cell = row.typed(fault.fields[0])
-    if cell is not None and cell.value == fault.scheduled:
-        return f"{cell.text} {fault.quantity.unit(system)}".rstrip()
-    return Measure(fault.scheduled, fault.quantity).text(system)
-
-
-def _missing(name: str, subject: Subject, row: Table, absences: list[Absent]) -> Finding:
-    """Return the one finding that says what a check went without."""
-    keys = tuple(dict.fromkeys(key for absent in absences for key in absent.keys))
-    reasons = dict.fromkeys(absent.why for absent in absences if absent.why)
-    needed = [_label(row, key) for key in keys if not any(key in why for why in reasons)]
-    if needed:
-        reasons[f"needs {', '.join(needed)}"] = None
-    return Finding(
-        check=name,
-        severity=Severity.MISSING,
-        subject=subject,
-        fields=keys,
-        message=f"not judged: {'; '.join(reasons)}",
-    )
-
-
-def _label(row: Table, key: str) -> str:
-    for catalogue in (row.catalogue, Condition.catalogue, Project.catalogue):
-        if key in catalogue:
-            return f"{catalogue[key].label.lower()} ({key})"
-    return key
-
-
-def _worst_first(found: list[Finding]) -> tuple[Finding, ...]:
-    return tuple(sorted(found, key=lambda finding: -finding.severity))

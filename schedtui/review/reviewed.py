@@ -12,7 +12,7 @@ from typing import TYPE_CHECKING
 
 from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase, labels
 from schedtui.review.figure import known
-from schedtui.review.finding import Finding, Severity
+from schedtui.review.finding import Finding, Severity, in_order
 from schedtui.review.judge import judge_condition, judge_schedule, judge_unit
 from schedtui.review.site import Site, site_of
 
@@ -49,10 +49,8 @@ class UnitReview:
 
     @property
     def findings(self) -> tuple[Finding, ...]:
-        """All findings of the unit, worst first."""
-        if not self.shared:
-            return self.own
-        return tuple(sorted((*self.own, *self.shared), key=lambda finding: -finding.severity))
+        """All findings of the unit, in the order they are read."""
+        return in_order((*self.own, *self.shared)) if self.shared else self.own
 
     @property
     def worst(self) -> Severity | None:
@@ -156,8 +154,7 @@ def review(schedule: Schedule, previous: Review | None = None) -> Review:
     rest = [one for one in whole if one.subject.table != "unit"]
     for condition in schedule.conditions:
         rest += judge_condition(ConditionCase(condition, site))
-    rest.sort(key=lambda finding: -finding.severity)
-    return Review(schedule, site, own, tuple(rest))
+    return Review(schedule, site, own, in_order(rest))
 
 
 def _required_tons(case: UnitCase) -> float:

@@ -56,6 +56,7 @@ def find_in_condition(case: ConditionCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Every stated pair of properties is one that moist air can have.",
+    explains=True,
     source="ASHRAE Handbook—Fundamentals, ch. 1",
     unit=find_in_unit,
     condition=find_in_condition,

@@ -35,6 +35,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Outdoor air is not above supply air.",
+    explains=True,
     source="conservation of mass",
     judges=("outdoor_airflow",),
     unit=find,

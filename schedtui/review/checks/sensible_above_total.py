@@ -35,6 +35,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="The scheduled sensible capacity is not above the total.",
+    explains=True,
     source="by definition: total is sensible and latent",
     judges=("cool_sensible",),
     unit=find,

@@ -34,6 +34,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Nothing is stated in two ways at once.",
+    explains=True,
     source="by definition",
     unit=find,
 )

@@ -39,6 +39,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="No number looks as if typed in another unit.",
+    explains=True,
     source="common practice",
     unit=find,
 )

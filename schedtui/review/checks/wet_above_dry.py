@@ -59,6 +59,7 @@ def find_in_condition(case: ConditionCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="No wet bulb is above its dry bulb.",
+    explains=True,
     source="ASHRAE Handbook—Fundamentals, ch. 1",
     unit=find_in_unit,
     condition=find_in_condition,

@@ -30,9 +30,10 @@ class Table:
         system: unit system of its numbers.
         own: the cells stated in the row itself.
         inherited: cells that hold where the row states none.
+        reads: collects the keys whose values are asked for, where someone wants to know.
     """
 
-    __slots__ = ("inherited", "own", "row_id", "system")
+    __slots__ = ("inherited", "own", "reads", "row_id", "system")
     catalogue: ClassVar[Mapping[str, Field[object]]] = {}
 
     def __init__(
@@ -41,11 +42,13 @@ class Table:
         system: System,
         own: Mapping[str, Typed],
         inherited: Mapping[str, Typed] = _NOTHING,
+        reads: set[str] | None = None,
     ) -> None:
         self.row_id = row_id
         self.system = system
         self.own = own
         self.inherited = inherited
+        self.reads = reads
 
     def __init_subclass__(cls) -> None:
         """Collect the subclass's fields in the order they are written."""
@@ -66,6 +69,8 @@ class Table:
 
     def value_of(self, field: Field[T]) -> T:
         """Return the value of `field`; its default where nothing readable is stated."""
+        if self.reads is not None:
+            self.reads.add(field.key)
         cell = self.own.get(field.key) or self.inherited.get(field.key)
         if cell is None or cell.bad:
             return field.usual(self.system)
@@ -104,3 +109,7 @@ class Table:
         """
         cells = {key: Typed("", value, "") for key, value in values.items()}
         return type(self)(self.row_id, self.system, {**self.own, **cells}, self.inherited)
+
+    def traced(self, reads: set[str]) -> Self:
+        """Return this row as one that notes in `reads` which keys are asked for."""
+        return type(self)(self.row_id, self.system, self.own, self.inherited, reads)

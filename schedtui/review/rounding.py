@@ -1,0 +1,148 @@
+"""Whether the digits that a schedule prints can explain a fault.
+
+A number printed with d decimals stands for half a step either side. A fault stands only if it is
+still one at the most favourable corner of those intervals. Which numbers a check reads is found by
+watching it, so that no check knows of this.
+"""
+
+from __future__ import annotations
+
+import math
+from collections.abc import Callable, Iterable, Mapping
+from dataclasses import dataclass
+
+from schedtui.errors import Absent, AirError
+from schedtui.review.finding import Fault
+from schedtui.schedule.catalogue.kinds import NumberKind
+from schedtui.schedule.catalogue.unit import Unit
+from schedtui.units import LOAD, TEMPERATURE, System, step
+
+FindIn = Callable[[Unit], Iterable[Fault]]
+
+# The wet-bulb formula changes from water to ice on the wick at freezing, where the humidity ratio
+# drops by a tenth: an interval across it has its best place on either side.
+_FREEZING: dict[System, float] = {"IP": 32.0, "SI": 0.0}
+_BESIDE = 1e-6
+_HALVINGS = 14
+
+
+@dataclass(frozen=True, slots=True)
+class Explained:
+    """How the printed digits explain a fault.
+
+    Args:
+        key: the field whose next digit would do most to settle it.
+        band: how far the digits let the comparison move, in the fault's unit.
+    """
+
+    key: str
+    band: float
+
+
+def explained_by_digits(unit: Unit, fault: Fault, find: FindIn, cap: float) -> Explained | None:
+    """Return how rounding alone can explain a fault, None where the fault stands.
+
+    Args:
+        unit: the unit as scheduled.
+        fault: the fault, found in it.
+        find: the check that found it, over any reading of the unit.
+        cap: the widest band of a load [% of what is required].
+    """
+    if fault.scheduled is None or fault.required is None:
+        return None
+    reads: set[str] = set()
+    if _distance(unit.traced(reads), fault, find) == 0:
+        return None  # found in something else than the unit's own numbers
+    corner, best = _favourable_corner(unit, fault, find, reads)
+    if not corner or _distance(unit.replaced(corner), fault, find) > 0:
+        return None
+    share, moved = _share_needed(unit, fault, find, corner)
+    if fault.quantity is LOAD and moved > cap / 100 * abs(fault.required):
+        return None
+    return Explained(best, moved / share)
+
+
+def _favourable_corner(
+    unit: Unit, fault: Fault, find: FindIn, reads: Iterable[str]
+) -> tuple[Mapping[str, float], str]:
+    """Return for each printed number that matters its most favourable value; name the first.
+
+    Each number is tried by itself: every check here moves one way with each of its numbers.
+    """
+    start = _distance(unit, fault, find)
+    corner: dict[str, float] = {}
+    gains: dict[str, float] = {}
+    for key in sorted(reads):
+        for value in _interval(unit, key):
+            gain = start - _distance(unit.replaced({key: value}), fault, find)
+            if gain > gains.get(key, 0.0):
+                corner[key], gains[key] = value, gain
+    return corner, max(gains, key=lambda key: gains[key], default="")
+
+
+def _interval(unit: Unit, key: str) -> Iterable[float]:
+    """Return the ends of what a printed number may stand for, and both sides of freezing."""
+    field, cell = Unit.catalogue[key], unit.typed(key)
+    if not field.printed or cell is None or not isinstance(cell.value, float):
+        return ()
+    size = step(cell.text)
+    if size is None:
+        return ()
+    low, high = cell.value - size / 2, cell.value + size / 2
+    ends = [low, high]
+    freezing = _FREEZING[unit.system]
+    if field.quantity is TEMPERATURE and low < freezing < high:
+        ends += [freezing - _BESIDE, freezing + _BESIDE]
+    kind = field.kind
+    assert isinstance(kind, NumberKind)  # noqa: S101  what is printed is a number
+    accepted = kind.ip if unit.system == "IP" else kind.si
+    return [end for end in ends if accepted.holds(end)]
+
+
+def _distance(unit: Unit, fault: Fault, find: FindIn) -> float:
+    """Return how far apart the fault's two numbers stand in a reading of the unit; 0 where fine."""
+    again = _same_fault(unit, fault, find)
+    if again is None:
+        return 0.0
+    if again.scheduled is None or again.required is None:
+        return math.inf
+    return abs(again.scheduled - again.required) or math.ulp(1.0)
+
+
+def _same_fault(unit: Unit, fault: Fault, find: FindIn) -> Fault | None:
+    try:
+        for again in find(unit):
+            if again.fields == fault.fields:
+                return again
+    except (Absent, AirError):  # not to be judged there, so nothing is explained there
+        return Fault("", fault.fields)
+    return None
+
+
+def _share_needed(
+    unit: Unit, fault: Fault, find: FindIn, corner: Mapping[str, float]
+) -> tuple[float, float]:
+    """Return the share of the way to a corner at which the fault is gone, and what moved by then.
+
+    Returns:
+        The share, above 0 and at most 1, and the movement in the fault's unit.
+    """
+    base = {key: _number(unit, key) for key in corner}
+    start = last = _distance(unit, fault, find)
+    low, high = 0.0, 1.0
+    for _ in range(_HALVINGS):
+        middle = (low + high) / 2
+        values = {key: base[key] + middle * (corner[key] - base[key]) for key in corner}
+        distance = _distance(unit.replaced(values), fault, find)
+        if distance > 0:
+            low, last = middle, distance
+        else:
+            high = middle
+    return high, start - last
+
+
+def _number(unit: Unit, key: str) -> float:
+    cell = unit.typed(key)
+    assert cell is not None  # noqa: S101  it has an interval, so it has a number
+    assert isinstance(cell.value, float)  # noqa: S101
+    return cell.value
