@@ -15,13 +15,13 @@ from schedtui.report.page import (
     Table,
 )
 from schedtui.review.figure import known
-from schedtui.review.finding import WORST_FIRST, Finding, Measure
+from schedtui.review.finding import WORST_FIRST, Finding, Measure, Severity
 from schedtui.review.quantities import COLUMNS
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import ALTITUDE, LOAD, STATION_PRESSURE, format_number
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator
+    from collections.abc import Callable, Iterable, Iterator
 
     from schedtui.review.reviewed import Review, UnitReview
 
@@ -52,7 +52,7 @@ def findings_page(review: Review, file: str) -> Page:
         found = [one for one in review.all_findings if one.severity == severity]
         if found:
             blocks.append(Heading(f"{severity.word.capitalize()} ({len(found)})"))
-            blocks.append(Entries(tuple(finding_entry(one, one.subject.label) for one in found)))
+            blocks.append(finding_entries(found, lambda one: one.subject.label))
     if review.units:
         load = LOAD.unit(review.schedule.system)
         blocks += [
@@ -116,21 +116,31 @@ def _sizes(review: Review) -> str:
     return f"{units}, {_number(len(review.schedule.conditions), 'condition')}"
 
 
-def finding_entry(finding: Finding, label: str) -> Entry:
-    """Return a finding as an entry of a list.
+def finding_entries(findings: Iterable[Finding], label: Callable[[Finding], str]) -> Entries:
+    """Return findings as a list; what could not be judged for one and the same reason is one entry.
 
     Args:
-        finding: the finding.
-        label: what stands before it: what it is about, or how bad it is.
+        findings: the findings, in the order they are read.
+        label: what stands before each: what it is about, or how bad it is.
     """
+    entries: dict[tuple[str, ...], Entry] = {}
+    for place, finding in enumerate(findings):
+        alike = (label(finding), finding.message)
+        if finding.severity is not Severity.MISSING:
+            alike = (*alike, str(place))
+        before = entries.get(alike)
+        head = f"{before.head}, {finding.check}" if before else _head(finding)
+        entries[alike] = Entry(label(finding), head, (finding.message,))
+    return Entries(tuple(entries.values()))
+
+
+def _head(finding: Finding) -> str:
     head = finding.check
     if finding.condition and finding.subject.table == "unit":
         head += f" at {finding.condition}"
     if finding.margin is not None:
         head += f", {finding.margin:+.1f} %"
-    if finding.accepted:
-        head += " (accepted)"
-    return Entry(label, head, (finding.message,))
+    return f"{head} (accepted)" if finding.accepted else head
 
 
 def _summary(review: Review) -> Table:

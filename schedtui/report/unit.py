@@ -5,8 +5,8 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from schedtui.errors import Absent, AirError
-from schedtui.report.findings import finding_entry
-from schedtui.report.page import Block, Entries, Heading, Page, Paragraph, Table
+from schedtui.report.findings import finding_entries
+from schedtui.report.page import Block, Heading, Page, Paragraph, Table
 from schedtui.review.figure import known
 from schedtui.review.quantities import COOLING_FIGURES, COOLING_STATES
 from schedtui.units import (
@@ -54,9 +54,7 @@ def unit_findings_page(reviewed: UnitReview) -> Page:
            if cell.bad]  # fmt: skip
     blocks: list[Block] = [heading, *(Paragraph(text) for text in bad)]
     if reviewed.findings:
-        blocks.append(
-            Entries(tuple(finding_entry(one, one.severity.word) for one in reviewed.findings))
-        )
+        blocks.append(finding_entries(reviewed.findings, lambda one: one.severity.word))
     elif not bad:
         blocks.append(Paragraph("Nothing found."))
     return Page(tuple(blocks))

@@ -5,21 +5,23 @@ from __future__ import annotations
 from dataclasses import dataclass
 from typing import TYPE_CHECKING
 
+from schedtui.air.flow import volume_flow
 from schedtui.errors import Absent
 from schedtui.review.airpath import outdoor_air
 from schedtui.review.cooling import Cooling
+from schedtui.review.face import velocity
 from schedtui.review.figure import figure, known
 from schedtui.review.heating import Heating
 from schedtui.review.row import RowCoil
 from schedtui.schedule.catalogue.condition import Condition
+from schedtui.schedule.catalogue.unit import Unit
 from schedtui.schedule.typed import Typed
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator, Mapping
+    from collections.abc import Callable, Iterator, Mapping
 
     from schedtui.air.state import State
     from schedtui.review.site import Site
-    from schedtui.schedule.catalogue.unit import Unit
     from schedtui.schedule.view import Schedule
 
 # A unit without outdoor air needs no condition; where the file has none it is computed at this.
@@ -90,10 +92,22 @@ class UnitCase:
     def rated(self) -> Cooling:
         """The cooling condition that the scheduled capacity was rated at.
 
-        Of those at full load the one whose air entering the coil is nearest the scheduled entering
-        state; the governing one where no such state is scheduled.
+        The nearest one, if it is near; the governing one where no entering state is scheduled.
         """
-        if not self.unit.stated("cool_eat_db") and not self.unit.stated("cool_eat_wb"):
+        if not self._states_entering:
+            return self.governing
+        nearest = self.nearest
+        if self._distance(nearest) >= _NEAREST:
+            raise Absent(why="no full-load condition has the scheduled air entering the coil")
+        return nearest
+
+    @figure
+    def nearest(self) -> Cooling:
+        """The full-load condition whose air entering the coil is nearest the scheduled one.
+
+        Where no entering state is scheduled, that is the governing condition.
+        """
+        if not self._states_entering:
             return self.governing
         full = [
             (distance, at)
@@ -102,15 +116,27 @@ class UnitCase:
             and (distance := known(self._distance, at)) is not None
         ]
         if not full:
-            raise self._no_coil()
-        distance, nearest = min(full, key=lambda pair: pair[0])
-        if distance >= _NEAREST:
-            raise Absent(why="no full-load condition has the scheduled air entering the coil")
-        return nearest
+            raise self._no_entering()
+        return min(full, key=lambda pair: pair[0])[1]
+
+    @property
+    def _states_entering(self) -> bool:
+        return self.unit.stated("cool_eat_db") or self.unit.stated("cool_eat_wb")
+
+    @figure
+    def face_velocity(self) -> float:
+        """Velocity at the cooling coil's face, of the actual volume that leaves it [fpm | m/s]."""
+        area = self.unit.need(Unit.cool_face_area)
+        if area == 0:
+            raise Absent("cool_face_area", why="the face area is 0")
+        at = self.governing
+        actual = volume_flow(at.coil_mass, "actual", self.site.air, at.coil_leaving.v)
+        return velocity(actual, area, self.site.system)
 
     def _distance(self, at: Cooling) -> float:
         """Return how far the computed entering air is from the scheduled, in limits."""
         unit, limits, computed = self.unit, self.site.limits, at.coil_entering
+        unit.refuse_bad(Unit.cool_eat_db, Unit.cool_eat_wb)
         parts = []
         if unit.cool_eat_db is not None:
             parts.append(abs(unit.cool_eat_db - computed.db) / limits.entering_db)
@@ -120,11 +146,18 @@ class UnitCase:
 
     def _no_coil(self) -> Absent:
         """Return why no cooling condition gives a coil load."""
+        return self._why_none(_coil_total)
+
+    def _no_entering(self) -> Absent:
+        """Return why no cooling condition gives the air that enters the coil."""
+        return self._why_none(self._distance)
+
+    def _why_none(self, ask: Callable[[Cooling], float]) -> Absent:
         if not self.cooling:
             return Absent(why="no cooling condition applies")
         for at in self.cooling:
             try:
-                at.coil  # noqa: B018  asked for its absence
+                ask(at)
             except Absent as absent:
                 return absent
         return Absent(why="no cooling condition is at full load")

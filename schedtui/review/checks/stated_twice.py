@@ -11,9 +11,12 @@ from typing import TYPE_CHECKING
 from schedtui.review.check import Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
+from schedtui.units import PERCENT
 
 if TYPE_CHECKING:
     from schedtui.review.case import UnitCase
+
+_POINTS = 1.0  # of the supply airflow, what two statements of one bypass may part by [%]
 
 
 def find(case: UnitCase) -> Faults:
@@ -29,6 +32,23 @@ def find(case: UnitCase) -> Faults:
                 tuple(keys),
                 values={"what": what, "keys": " and ".join(keys)},
             )
+    yield from _two_bypasses(case)
+
+
+def _two_bypasses(case: UnitCase) -> Faults:
+    """Look whether bypass and coil airflow, which may both be stated, are one."""
+    unit = case.unit
+    if unit.bypass is None or unit.cool_airflow is None or not unit.supply_airflow:
+        return
+    by_airflow = (1 - unit.cool_airflow / unit.supply_airflow) * 100
+    if abs(unit.bypass - by_airflow) > _POINTS:
+        yield Fault(
+            "bypass {scheduled}, the coil airflow leaves {required}",
+            ("bypass", "cool_airflow"),
+            unit.bypass,
+            by_airflow,
+            PERCENT,
+        )
 
 
 CHECK = Check(
