@@ -123,11 +123,10 @@ def finding_entries(findings: Iterable[Finding], label: Callable[[Finding], str]
         findings: the findings, in the order they are read.
         label: what stands before each: what it is about, or how bad it is.
     """
-    entries: dict[tuple[str, ...], Entry] = {}
+    entries: dict[tuple[str, str, str], Entry] = {}
     for place, finding in enumerate(findings):
-        alike = (label(finding), finding.message)
-        if finding.severity is not Severity.MISSING:
-            alike = (*alike, str(place))
+        apart = "" if finding.severity is Severity.MISSING else str(place)
+        alike = (label(finding), finding.message, apart)
         before = entries.get(alike)
         head = f"{before.head}, {finding.check}" if before else _head(finding)
         entries[alike] = Entry(label(finding), head, (finding.message,))
