@@ -3,26 +3,30 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, TypeVar
 
 from schedtui.air.flow import volume_flow
-from schedtui.errors import Absent
+from schedtui.errors import Absent, AirError
 from schedtui.review.airpath import outdoor_air
 from schedtui.review.cooling import Cooling
 from schedtui.review.face import velocity
 from schedtui.review.figure import figure, known
 from schedtui.review.heating import Heating
 from schedtui.review.row import RowCoil
+from schedtui.review.row_heat import RowHeat
 from schedtui.schedule.catalogue.condition import Condition
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.schedule.typed import Typed
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterator, Mapping
+    from collections.abc import Callable, Iterator, Mapping, Sequence
 
     from schedtui.air.state import State
     from schedtui.review.site import Site
+    from schedtui.schedule.catalogue.field import Field
     from schedtui.schedule.view import Schedule
+
+C = TypeVar("C")
 
 # A unit without outdoor air needs no condition; where the file has none it is computed at this.
 _ROOM_CONDITION = {
@@ -82,11 +86,7 @@ class UnitCase:
     @figure
     def governing(self) -> Cooling:
         """The cooling condition with the greatest coil total, the first of equals."""
-        totals = [(known(_coil_total, at), at) for at in self.cooling]
-        computed = [(total, at) for total, at in totals if total is not None]
-        if not computed:
-            raise self._no_coil()
-        return max(computed, key=lambda pair: pair[0])[1]
+        return self._greatest(self.cooling, lambda at: at.coil.total)
 
     @figure
     def rated(self) -> Cooling:
@@ -110,14 +110,11 @@ class UnitCase:
         if not self._states_entering:
             return self.governing
         full = [
-            (distance, at)
+            at
             for at in self.cooling
             if at.condition.sensible_load == at.condition.latent_load == _FULL_LOAD
-            and (distance := known(self._distance, at)) is not None
         ]
-        if not full:
-            raise self._no_entering()
-        return min(full, key=lambda pair: pair[0])[1]
+        return self._greatest(full or self.cooling, lambda at: -self._distance(at))
 
     @property
     def _states_entering(self) -> bool:
@@ -133,6 +130,58 @@ class UnitCase:
         actual = volume_flow(at.coil_mass, "actual", self.site.air, at.coil_leaving.v)
         return velocity(actual, area, self.site.system)
 
+    @figure
+    def fan_airflow(self) -> float:
+        """Actual volume at the supply fan's inlet [cfm | L/s], at the governing condition."""
+        at = self.governing
+        if at.basis == "actual":
+            return at.supply_airflow
+        return volume_flow(at.supply_mass, "actual", self.site.air, at.fan_inlet.v)
+
+    @figure
+    def heat_governing(self) -> Heating:
+        """The heating condition with the greatest load of the heating coil, the first of equals."""
+        return self._greatest(self.heating, lambda at: at.heat_load)
+
+    @figure
+    def heat_nearest(self) -> Heating:
+        """The heating condition whose air entering the heating coil is nearest the scheduled one.
+
+        Where no entering dry bulb is scheduled, that is the governing condition.
+        """
+        return self._nearest_heating(Unit.heat_eat_db, lambda at: at.heat_entering.db)
+
+    @figure
+    def preheat_nearest(self) -> Heating:
+        """The heating condition whose air entering the preheat is nearest the scheduled one."""
+        return self._nearest_heating(Unit.preheat_eat_db, lambda at: at.preheat_entering.db)
+
+    def _nearest_heating(
+        self, field: Field[float | None], entering: Callable[[Heating], float]
+    ) -> Heating:
+        self.unit.refuse_bad(field)
+        scheduled = self.unit.value_of(field)
+        if scheduled is None:
+            return self.heat_governing
+        return self._greatest(self.heating, lambda at: -abs(entering(at) - scheduled))
+
+    @figure
+    def row_heat(self) -> RowHeat:
+        """The heating coil as the row's own numbers have it."""
+        return RowHeat(self.unit, self.heat_nearest.condition, self.site)
+
+    def _greatest(self, conditions: Sequence[C], measure: Callable[[C], float]) -> C:
+        """Return the condition of the greatest measure, the first of equals.
+
+        Raises:
+            Absent: none has it; for the first one's reason.
+        """
+        measured = [(known(measure, at), at) for at in conditions]
+        found = [(value, at) for value, at in measured if value is not None]
+        if not found:
+            raise why_none(conditions, measure)
+        return max(found, key=lambda pair: pair[0])[1]
+
     def _distance(self, at: Cooling) -> float:
         """Return how far the computed entering air is from the scheduled, in limits."""
         unit, limits, computed = self.unit, self.site.limits, at.coil_entering
@@ -143,24 +192,6 @@ class UnitCase:
         if unit.cool_eat_wb is not None:
             parts.append(abs(unit.cool_eat_wb - computed.wb) / limits.entering_wb)
         return max(parts)
-
-    def _no_coil(self) -> Absent:
-        """Return why no cooling condition gives a coil load."""
-        return self._why_none(_coil_total)
-
-    def _no_entering(self) -> Absent:
-        """Return why no cooling condition gives the air that enters the coil."""
-        return self._why_none(self._distance)
-
-    def _why_none(self, ask: Callable[[Cooling], float]) -> Absent:
-        if not self.cooling:
-            return Absent(why="no cooling condition applies")
-        for at in self.cooling:
-            try:
-                ask(at)
-            except Absent as absent:
-                return absent
-        return Absent(why="no cooling condition is at full load")
 
 
 @dataclass(frozen=True, slots=True)
@@ -207,8 +238,16 @@ class ScheduleCase:
         return found
 
 
-def _coil_total(at: Cooling) -> float:
-    return at.coil.total
+def why_none(conditions: Sequence[C], ask: Callable[[C], object]) -> Absent:
+    """Return why none of some conditions has a figure: the first one's reason."""
+    for at in conditions:
+        try:
+            ask(at)
+        except Absent as absent:
+            return absent
+        except AirError as error:
+            return Absent(why=str(error))
+    return Absent(why="no such condition applies")
 
 
 def labels(units: tuple[Unit, ...]) -> Iterator[tuple[int, str]]:

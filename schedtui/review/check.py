@@ -11,6 +11,7 @@ from schedtui.review.finding import Fault, Severity
 if TYPE_CHECKING:
     from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
     from schedtui.review.cooling import Cooling
+    from schedtui.review.heating import Heating
 
 Faults = Iterable[Fault]
 
@@ -34,6 +35,7 @@ class Check:
         cooling: finds faults in a unit at each of its cooling conditions.
         rated: finds faults in a unit at its rated cooling condition.
         governing: finds faults in a unit at its governing cooling condition.
+        heating: finds faults in a unit at each of its heating conditions.
         condition: finds faults in a condition.
         schedule: finds faults in the schedule as a whole.
     """
@@ -48,5 +50,6 @@ class Check:
     cooling: Callable[[Cooling], Faults] | None = None
     rated: Callable[[Cooling], Faults] | None = None
     governing: Callable[[Cooling], Faults] | None = None
+    heating: Callable[[Heating], Faults] | None = None
     condition: Callable[[ConditionCase], Faults] | None = None
     schedule: Callable[[ScheduleCase], Faults] | None = None

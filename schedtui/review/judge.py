@@ -8,7 +8,7 @@ about.
 from __future__ import annotations
 
 from dataclasses import dataclass, replace
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, TypeVar
 
 from schedtui.errors import Absent, AirError
 from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
@@ -20,12 +20,14 @@ from schedtui.review.wording import band, lack, sentence
 from schedtui.schedule.load import CATALOGUES, NAMES
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterator
+    from collections.abc import Callable, Iterator, Sequence
 
+    from schedtui.review.airpath import AirPath
     from schedtui.review.check import Check, Faults
-    from schedtui.review.cooling import Cooling
     from schedtui.schedule.catalogue.table import Table
     from schedtui.schedule.catalogue.unit import Unit
+
+A = TypeVar("A", bound="AirPath")
 
 
 @dataclass(frozen=True, slots=True)
@@ -109,18 +111,25 @@ def _askings(check: Check, case: UnitCase) -> Iterator[_Asking]:
     if check.cooling is not None:
         if not case.cooling:
             yield _absent("no cooling condition applies")
-        yield from (_at(check.cooling, at) for at in _governing_first(case))
+        yield from (
+            _at(check.cooling, at) for at in _first(known(lambda: case.governing), case.cooling)
+        )
+    if check.heating is not None:
+        if not case.heating:
+            yield _absent("no heating condition applies")
+        governing = known(lambda: case.heat_governing)
+        yield from (_at(check.heating, at) for at in _first(governing, case.heating))
     if check.rated is not None:
         yield _at_one(check.rated, lambda: case.rated)
     if check.governing is not None:
         yield _at_one(check.governing, lambda: case.governing)
 
 
-def _at(find: Callable[[Cooling], Faults], at: Cooling) -> _Asking:
+def _at(find: Callable[[A], Faults], at: A) -> _Asking:
     return _Asking(at.name, lambda: find(at), lambda unit: find(at.of(unit)))
 
 
-def _at_one(find: Callable[[Cooling], Faults], ask: Callable[[], Cooling]) -> _Asking:
+def _at_one(find: Callable[[A], Faults], ask: Callable[[], A]) -> _Asking:
     try:
         return _at(find, ask())
     except Absent as absent:
@@ -134,11 +143,11 @@ def _absent(why: str, *keys: str) -> _Asking:
     return _Asking(None, missing, missing)
 
 
-def _governing_first(case: UnitCase) -> Iterator[Cooling]:
-    governing = known(lambda: case.governing)
+def _first(governing: A | None, conditions: Sequence[A]) -> Iterator[A]:
+    """Return the conditions with the governing one in front."""
     if governing is not None:
         yield governing
-    yield from (at for at in case.cooling if at is not governing)
+    yield from (at for at in conditions if at is not governing)
 
 
 def _judged(
