@@ -6,7 +6,9 @@ SchedtuiError
 ├── ScheduleError        a file was read but is no valid schedule; carries every problem found
 ├── SpliceError          edits could not be written into the source without touching something else
 ├── AmountError          a typed number, or number with unit, cannot be accepted
-├── AirError             no moist air has the stated properties
+├── StateError           nothing can be in the stated state
+│   ├── AirError         no moist air has the stated properties
+│   └── FluidError       a fluid outside its data, freezing included
 ├── UsageError           a command was asked for something it does not do
 └── Absent               a figure cannot be had; names the keys that would give it
 
@@ -38,8 +40,16 @@ class AmountError(SchedtuiError):
     """A typed number, or a number with a unit, cannot be accepted; the text says what is."""
 
 
-class AirError(SchedtuiError):
+class StateError(SchedtuiError):
+    """Nothing can be in the stated state, or nothing is known of it there."""
+
+
+class AirError(StateError):
     """No moist air has the stated properties (a wet bulb above its dry bulb, for one)."""
+
+
+class FluidError(StateError):
+    """A fluid outside the data of its properties, freezing included; the text names the range."""
 
 
 class SpliceError(SchedtuiError):
@@ -72,8 +82,11 @@ class Problem:
     def __str__(self) -> str:
         """Return the problem as one phrase, without the file and line."""
         where = " ".join(part for part in (self.subject, self.key) if part)
-        what = f"{self.value} {self.accepted}" if self.value else self.accepted
-        return f"{where}: {what}" if where else what
+        if not where:  # the value is then no cell's, but what stands on the line
+            return f"{self.value}: {self.accepted}" if self.value else self.accepted
+        return (
+            f"{where}: {self.value} {self.accepted}" if self.value else f"{where}: {self.accepted}"
+        )
 
 
 class ScheduleError(SchedtuiError):

@@ -6,8 +6,6 @@ Every exception of ours ends here, as one line and an exit status.
 from __future__ import annotations
 
 import argparse
-import os
-import sys
 from functools import cache
 from typing import TYPE_CHECKING, NoReturn
 
@@ -28,10 +26,13 @@ conditions and holds it against what is scheduled."""
 
 
 class _Parser(argparse.ArgumentParser):
-    """A parser whose complaint is one line."""
+    """A parser whose complaint is one line, and whose help is a result like any other."""
 
     def error(self, message: str) -> NoReturn:
         raise UsageError(f"{self.prog}: {message}; see {self.prog} --help")
+
+    def _print_message(self, message: str, file: object = None) -> None:  # noqa: ARG002  the library's own signature
+        output.result(message)
 
 
 @cache
@@ -57,8 +58,7 @@ def run(arguments: Sequence[str], open_screen: Callable[[str], int]) -> int:
     except SchedtuiError as error:
         output.failure(str(error))
     except BrokenPipeError:
-        # Whoever read us has gone; the interpreter must not trip over the same pipe again.
-        os.dup2(os.open(os.devnull, os.O_WRONLY), sys.stdout.fileno())
+        pass  # whoever read us has gone, and need not be told
     except KeyboardInterrupt:
         output.failure("interrupted")
     return ExitStatus.FAILED
@@ -86,7 +86,7 @@ def _parser(known: Mapping[str, Command]) -> argparse.ArgumentParser:
         epilog=f"schedtui FILE opens a schedule in the terminal. {CAUTION}",
     )
     parser.add_argument("--version", action="version", version=f"schedtui {__version__}")
-    parts = parser.add_subparsers(dest="command", metavar="COMMAND", required=True)
+    parts = parser.add_subparsers(prog="schedtui", dest="command", metavar="COMMAND", required=True)
     for name, command in known.items():
         part = parts.add_parser(
             name,

@@ -32,11 +32,13 @@ class Origin:
         source: the file's text it was read from.
         index: its place in its array then; None for a table that stands once.
         cells: its cells as read, so that saving writes only what differs.
+        accepted: how many acceptances it had.
     """
 
     source: Source = field(repr=False, compare=False)
     index: int | None
     cells: Mapping[str, Typed] = field(repr=False)
+    accepted: int = 0
 
 
 @dataclass(frozen=True, slots=True)
@@ -117,6 +119,11 @@ class Document:
             return replace(self, single={**self.single, table: row})
         rows = tuple(row if one.row_id == row.row_id else one for one in self.arrays[table])
         return replace(self, arrays={**self.arrays, table: rows})
+
+    def without_table(self, table: str) -> Document:
+        """Return the document without a table that stands once."""
+        single = {name: row for name, row in self.single.items() if name != table}
+        return replace(self, single=single)
 
     def with_rows(self, table: str, rows: tuple[Row, ...]) -> Document:
         """Return the document with other rows in an array."""

@@ -9,7 +9,7 @@ from __future__ import annotations
 from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING, Protocol
 
-from schedtui.schedule.document import Document, Row
+from schedtui.schedule.document import SINGLE, Document, Origin, Row
 
 if TYPE_CHECKING:
     from collections.abc import Mapping
@@ -48,7 +48,7 @@ class SetCell:
     def apply(self, document: Document) -> tuple[Document, Edit]:
         """Set the cell."""
         rows = document.rows(self.table)
-        if not rows:  # a table that stands once comes to be with its first key
+        if not rows:  # a table that stands once comes to be with its first key, and goes with it
             row = Row(self.row_id, {})
             document = replace(document, next_id=max(document.next_id, self.row_id + 1))
         else:
@@ -59,12 +59,53 @@ class SetCell:
             cells[self.key] = self.cell
         if self.order is not None:
             cells = _in_order(cells, self.order)
-        inverse = SetCell(self.table, self.row_id, self.key, before, tuple(row.cells))
+        inverse = SetCell(self.table, row.row_id, self.key, before, tuple(row.cells))
+        if self.table in SINGLE and not cells and row.origin is None:
+            return document.without_table(self.table), inverse
         return document.with_row(self.table, replace(row, cells=cells)), inverse
 
     def touches(self) -> frozenset[tuple[str, int]]:
         """Name the one row."""
         return frozenset({(self.table, self.row_id)})
+
+
+@dataclass(frozen=True, slots=True)
+class SetAccepted:
+    """Give a unit other acceptances.
+
+    Args:
+        row_id: id of the unit.
+        accepted: all that it shall have, as rows.
+    """
+
+    row_id: int
+    accepted: tuple[Row, ...]
+
+    def apply(self, document: Document) -> tuple[Document, Edit]:
+        """Set the acceptances; those of the file stand first, as they will when it is saved."""
+        unit = document.row("unit", self.row_id)
+        now = {one.row_id: one.origin for one in unit.accepted}
+        placed = [
+            replace(one, origin=now.get(one.row_id, _still(one.origin, unit.origin)))
+            for one in self.accepted
+        ]
+        placed.sort(key=_place_in_file)
+        changed = document.with_row("unit", replace(unit, accepted=tuple(placed)))
+        ids = (document.next_id - 1, *(one.row_id for one in self.accepted))
+        return replace(changed, next_id=max(ids) + 1), SetAccepted(self.row_id, unit.accepted)
+
+    def touches(self) -> frozenset[tuple[str, int]]:
+        """Name the unit."""
+        return frozenset({("unit", self.row_id)})
+
+
+def _still(origin: Origin | None, unit: Origin | None) -> Origin | None:
+    """Return where an acceptance came from, if its unit is of the same text still."""
+    return origin if origin and unit and origin.source is unit.source else None
+
+
+def _place_in_file(row: Row) -> tuple[bool, int]:
+    return row.origin is None, row.origin.index or 0 if row.origin else 0
 
 
 @dataclass(frozen=True, slots=True)

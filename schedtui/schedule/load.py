@@ -7,7 +7,7 @@ shape, a foreign format, an unreadable unit system.
 
 from __future__ import annotations
 
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 from difflib import get_close_matches
 from typing import TYPE_CHECKING, Any, cast
 
@@ -22,17 +22,21 @@ from schedtui.schedule.catalogue.project import Project
 from schedtui.schedule.catalogue.record import Record
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.schedule.document import ARRAYS, SINGLE, Document, Origin, Row
+from schedtui.schedule.label import unit_labels
 from schedtui.schedule.toml_source import BadValue, Path, Source, read_source
 from schedtui.schedule.typed import Typed
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator, Mapping
+    from collections.abc import Iterable, Iterator, Mapping, Sequence
 
     from schedtui.schedule.catalogue.field import Field
     from schedtui.schedule.catalogue.table import Table
     from schedtui.units import System
 
 FORMAT = 1
+SYSTEMS: tuple[System, System] = ("IP", "SI")
+
+_NO_TOML = "is no TOML value"
 
 CATALOGUES: Mapping[str, type[Table]] = {
     "project": Project,
@@ -63,54 +67,69 @@ def load(text: str, file: str = "") -> Document:
             bad cells, and `problems` of the document names each.
     """
     try:
-        source = read_source(text)
-        _refuse_misshapen(source)
-        return _Reading(source, _system(source)).document()
+        return _document(read_source(text))
     except ScheduleError as error:
         raise ScheduleError(error.problems, file) from None
 
 
-def _refuse_misshapen(source: Source) -> None:
-    """Raise for a foreign format and for tables that are not of the shape they must have."""
-    values = source.values
-    problems = []
-    found = values.get("format", FORMAT)
-    if isinstance(found, bool) or found != FORMAT:
-        raw = source.raw(("format",)) if ("format",) in source.paths() else ""
-        accepted = f"is not a format that this program reads; accepted: {FORMAT}"
-        problems.append(Problem(source.line(("format",)), "", "format", raw, accepted))
-    for name in SINGLE:
-        if name in values and not isinstance(values[name], dict):
-            accepted = f"is no table; accepted: [{name}]"
-            problems.append(Problem(source.line((name,)), "", name, "", accepted))
-    for name in ARRAYS:
-        rows = values.get(name, [])
-        if not isinstance(rows, list) or not all(isinstance(row, dict) for row in rows):
-            accepted = f"is no array of tables; accepted: [[{name}]]"
-            problems.append(Problem(source.line((name,)), "", name, "", accepted))
-    if problems:
-        raise ScheduleError(problems)
-
-
-def _system(source: Source) -> System:
-    """Return the project's unit system, which every number's meaning hangs on.
-
-    Raises:
-        ScheduleError: it is not there or none of the two.
-    """
+def _document(source: Source) -> Document:
+    """Read a source, or raise every problem of one that cannot be read."""
+    _refuse_foreign(source)
+    misshapen = dict(_misshapen(source))
     project = source.values.get("project")
     if project is None:
-        raise ScheduleError(
-            [Problem(1, "project", "", "", "is missing; accepted: [project] with title and units")]
-        )
-    found = project.get("units")
-    if found not in ("IP", "SI") or not isinstance(found, str):
-        path = ("project", "units") if "units" in project else ("project",)
-        raw = source.raw(path) if "units" in project else ""
-        wrong = "is none of the choices" if "units" in project else "is missing"
-        accepted = f'{wrong}; accepted: "IP", "SI"'
-        raise ScheduleError([Problem(source.line(path), "project", "units", raw, accepted)])
-    return cast("System", found)
+        missing = "is missing; accepted: [project] with title and units"
+        misshapen["project"] = Problem(1, "project", "", "", missing)
+    units = project.get("units") if isinstance(project, dict) else None
+    if units in ("IP", "SI") and not misshapen:
+        return _Reading(source, cast("System", units)).document()
+    ip, si = (_Reading(source, system, frozenset(misshapen)).document() for system in SYSTEMS)
+    found = list(ip.problems) if units == "IP" else list(si.problems)
+    if units not in ("IP", "SI"):
+        found = list(_in_both(ip.problems, si.problems))
+    raise ScheduleError(_by_line([*misshapen.values(), *found]))
+
+
+def _refuse_foreign(source: Source) -> None:
+    """Raise for a format whose keys may mean something else."""
+    found = source.values.get("format", FORMAT)
+    if isinstance(found, bool) or found != FORMAT:
+        raw = _raw(source, ("format",))
+        accepted = f"is not a format that this program reads; accepted: {FORMAT}"
+        raise ScheduleError([Problem(source.line(("format",)), "", "format", raw, accepted)])
+
+
+def _misshapen(source: Source) -> Iterator[tuple[str, Problem]]:
+    """Yield the tables that are not of the shape they must have, each with its problem."""
+    for name in (*SINGLE, *ARRAYS):
+        value = source.values.get(name, {} if name in SINGLE else [])
+        if name in SINGLE and not isinstance(value, dict):
+            accepted = f"is no table; accepted: [{name}]"
+            yield name, Problem(source.line((name,)), "", name, "", accepted)
+        if name in ARRAYS and not _are_tables(value):
+            accepted = f"is no array of tables; accepted: [[{name}]]"
+            yield name, Problem(source.line((name,)), "", name, "", accepted)
+
+
+def _in_both(ip: Sequence[Problem], si: Sequence[Problem]) -> Iterator[Problem]:
+    """Yield what is wrong whatever the unit system, for a file that does not tell its own."""
+    others = {(one.line, one.subject, one.key): one for one in si}
+    for one in ip:
+        other = others.get((one.line, one.subject, one.key))
+        if other is not None:
+            same = one.accepted == other.accepted
+            metric = "" if same else f" in IP, {other.accepted.partition('accepted: ')[2]} in SI"
+            yield replace(one, accepted=one.accepted + metric)
+
+
+def _by_line(problems: Iterable[Problem]) -> list[Problem]:
+    return sorted(problems, key=lambda problem: problem.line)
+
+
+def _raw(source: Source, path: Path) -> str:
+    """Return a value's characters; none for a table, whose text is not in one place."""
+    place = source.paths().get(path)
+    return source.raw(path) if place is not None and place.value is not None else ""
 
 
 @dataclass(slots=True)
@@ -119,12 +138,14 @@ class _Reading:
 
     source: Source
     system: System
+    skipped: frozenset[str] = frozenset()
     problems: list[Problem] = field(default_factory=list)
+    noted: set[Path] = field(default_factory=set)
     next_id: int = 1
 
     def document(self) -> Document:
         """Read every table."""
-        values = self.source.values
+        values = {k: v for k, v in self.source.values.items() if k not in self.skipped}
         single = {
             name: self._row(name, (name,), values[name], name, None)
             for name in SINGLE
@@ -135,17 +156,13 @@ class _Reading:
             own = [row.text("key") for row in arrays.get("column", ())]
             arrays[name] = tuple(self._array(name, values.get(name, []), own))
         self._check_names(arrays)
+        self._note_bad_elsewhere()
         unknown = tuple(key for key in values if key not in (*SINGLE, *ARRAYS, "format"))
-        problems = tuple(sorted(self.problems, key=lambda problem: problem.line))
+        problems = tuple(_by_line(self.problems))
         return Document(self.source, self.system, single, arrays, self.next_id, problems, unknown)
 
     def _array(self, name: str, rows: list[dict[str, Any]], own_keys: list[str]) -> Iterator[Row]:
-        for index, values in enumerate(rows):
-            label = values.get(NAMES[name])
-            plain = isinstance(label, str) and label.strip()
-            subject = f"{name} {index + 1}" if not plain else str(label)
-            if plain and name != "unit":
-                subject = f"{name} {label}"
+        for index, (values, subject) in enumerate(zip(rows, _subjects(name, rows), strict=True)):
             row = self._row(name, (name, index), values, subject, index, own_keys)
             if name == "condition":
                 self._check_humidity(row, (name, index), subject)
@@ -171,30 +188,45 @@ class _Reading:
                     for place, one in enumerate(value)
                 )
                 continue
-            cells[key] = self._cell(
-                catalogue.get(key), (*path, key), value, key in (own_keys or ())
-            )
-            self._note_bad(cells[key], (*path, key), subject)
+            known = catalogue.get(key)
+            cells[key] = self._cell(known, (*path, key), value, key in (own_keys or ()))
+            number = known is not None and known.quantity is not None
+            shown = _shown(value, cells[key].toml, number=number)
+            self._note_bad(cells[key], shown, (*path, key), subject)
         if table != "defaults":
             self._note_missing(catalogue, cells, path, subject)
-        return Row(row_id, cells, Origin(self.source, index, dict(cells)), accepted)
+        origin = Origin(self.source, index, dict(cells), len(accepted))
+        return Row(row_id, cells, origin, accepted)
 
     def _cell(self, known: Field[object] | None, path: Path, value: Any, own: bool) -> Typed:
         """Read one value; what no catalogue knows is kept as the characters it stands in."""
-        raw = self.source.raw(path) if path in self.source.paths() else ""
+        raw = _raw(self.source, path)
         if known is not None:
             return known.kind.read(value, raw, self.system)
         if own:
             return FreeKind().read(value, raw, self.system)
         if isinstance(value, BadValue):
-            return Typed(raw, None, raw, "is no TOML value")
+            return Typed(raw, None, raw, _NO_TOML)
+        if path[0] == "unit" and path[-1] == "accepted":
+            return Typed(raw, None, raw, "is no array of tables; accepted: [[unit.accepted]]")
         return Typed(value if isinstance(value, str) else raw, None, raw)
 
-    def _note_bad(self, cell: Typed, path: Path, subject: str) -> None:
+    def _note_bad(self, cell: Typed, shown: str, path: Path, subject: str) -> None:
         if cell.problem is not None:
+            self.noted.add(path)
             line = self.source.line(path)
-            shown = cell.toml or "nothing"
             self.problems.append(Problem(line, subject, str(path[-1]), shown, cell.problem))
+
+    def _note_bad_elsewhere(self) -> None:
+        """Note what is no TOML in tables that nothing here reads."""
+        for path, place in self.source.paths().items():
+            if place.value is None or not place.value.bad:
+                continue
+            if not any(path[:size] in self.noted for size in range(1, len(path) + 1)):
+                self.noted.add(path)
+                key = ".".join(str(part) for part in path if isinstance(part, str))
+                shown = _raw(self.source, path) or "nothing"
+                self.problems.append(Problem(self.source.line(path), "", key, shown, _NO_TOML))
 
     def _note_missing(
         self,
@@ -230,6 +262,22 @@ class _Reading:
                     taken = "is a key of every unit; accepted: a key that is none"
                     self.problems.append(Problem(line, f"{table} {name}", key, f'"{name}"', taken))
                 seen.add(name)
+
+
+def _subjects(name: str, rows: list[dict[str, Any]]) -> Iterator[str]:
+    """Say what messages call each row of an array: "AHU-1", "condition summer peak", "plant 2"."""
+    labels = [row.get(NAMES[name]) for row in rows]
+    plain = [one if isinstance(one, str) and one.strip() else None for one in labels]
+    if name == "unit":
+        return unit_labels(plain)
+    return (f"{name} {one or place}" for place, one in enumerate(plain, start=1))
+
+
+def _shown(value: Any, toml: str, *, number: bool) -> str:
+    """Return a value as messages show it; where a number should be, other text is in quotes."""
+    if isinstance(value, BadValue) and number and toml:
+        return f'"{toml}"'
+    return toml or ("nothing" if isinstance(value, BadValue) else "a table")
 
 
 def _are_tables(value: Any) -> bool:

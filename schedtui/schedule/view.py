@@ -15,6 +15,7 @@ from schedtui.schedule.catalogue.plant import Plant
 from schedtui.schedule.catalogue.project import Project
 from schedtui.schedule.catalogue.table import Table
 from schedtui.schedule.catalogue.unit import Unit
+from schedtui.schedule.label import unit_labels
 
 if TYPE_CHECKING:
     from collections.abc import Mapping
@@ -52,6 +53,11 @@ class Schedule:
     def system(self) -> System:
         """The unit system of every number."""
         return self.document.system
+
+    def labels(self) -> dict[int, str]:
+        """Return how messages name each unit, by row id."""
+        names = unit_labels(unit.tag for unit in self.units)
+        return {unit.row_id: name for unit, name in zip(self.units, names, strict=True)}
 
 
 def view(document: Document, previous: Schedule | None = None) -> Schedule:
@@ -103,9 +109,9 @@ def inherited(row: Row, defaults: Mapping[str, Typed]) -> dict[str, Typed]:
     """Return the defaults that hold for a unit's row.
 
     A unit's own key displaces the default of its alternatives too: a stated `room_wb` leaves no
-    default `room_rh`. Keys named in `without` have no default here.
+    default `room_rh`. Keys named in `without`, which may be a default itself, have no default here.
     """
-    cell = row.cells.get("without")
+    cell = row.cells.get("without") or defaults.get("without")
     without = cell.value if cell is not None and isinstance(cell.value, tuple) else ()
     settled = {
         known.instead_of

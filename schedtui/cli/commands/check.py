@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import json
+import os
 from collections.abc import Iterator, Sequence
 from pathlib import Path
 from typing import TYPE_CHECKING
@@ -55,8 +56,8 @@ def run(asked: argparse.Namespace) -> ExitStatus:
         except FileError as error:
             failed = True
             output.failure(str(error))
-    if reviewed:
-        many = len(asked.paths) > 1 or Path(asked.paths[0]).is_dir()
+    many = len(asked.paths) > 1 or _is_folder(asked.paths[0])
+    if reviewed or many:
         output.result(_printed(reviewed, asked.format, many=many))
     if failed:
         return ExitStatus.FAILED
@@ -68,9 +69,13 @@ def check_file(file: str) -> Review:
     """Read and review a schedule.
 
     Raises:
-        FileError: it cannot be read.
+        FileError: it cannot be read, or is a folder without schedules.
         ScheduleError: it has anything in it that cannot be read as a schedule.
     """
+    if not file:
+        raise FileError('"" is no name of a file')
+    if _is_folder(file):
+        raise FileError(f"{file}: there is no .toml file in this folder")
     document = load(read_text(Path(file)).text, file)
     if document.problems:
         raise ScheduleError(document.problems, file)
@@ -78,14 +83,14 @@ def check_file(file: str) -> Review:
 
 
 def _files(paths: Sequence[str]) -> Iterator[str]:
+    """Yield each file, and those of each folder; a folder that has none for itself."""
     for path in paths:
-        if not Path(path).is_dir():
-            yield path
-            continue
-        inside = sorted(Path(path).glob("*.toml"))
-        if not inside:
-            output.failure(f"{path}: no .toml file in this folder")
-        yield from map(str, inside)
+        inside = sorted(Path(path).glob("*.toml")) if _is_folder(path) else []
+        yield from [str(one) for one in inside if not one.is_dir()] or [path]
+
+
+def _is_folder(path: str) -> bool:
+    return os.path.isdir(path)  # noqa: PTH112  a Path's raises where the system does not say
 
 
 def _printed(reviewed: Reviewed, form: str, *, many: bool) -> str:

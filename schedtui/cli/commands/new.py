@@ -8,8 +8,10 @@ from typing import TYPE_CHECKING
 from schedtui.cli import output
 from schedtui.cli.command import Command
 from schedtui.cli.exit_status import ExitStatus
+from schedtui.errors import UsageError
 from schedtui.files import write_text
 from schedtui.schedule.typed import toml_text
+from schedtui.text_width import visible
 
 if TYPE_CHECKING:
     import argparse
@@ -63,12 +65,20 @@ def arguments(parser: argparse.ArgumentParser) -> None:
 
 
 def run(asked: argparse.Namespace) -> ExitStatus:
-    """Write the file, which must not exist."""
+    """Write the file, which must not exist unless it is to be replaced.
+
+    Raises:
+        FileError: it exists, or cannot be written.
+        UsageError: its title is blank.
+    """
     path = Path(asked.file)
-    title = asked.title or path.stem
+    title = path.stem if asked.title is None else asked.title
+    if not title.strip():
+        raise UsageError("schedtui new: --title must not be blank")
     text = _TEMPLATE.format(title=toml_text(title), units=asked.units, **_NUMBERS[asked.units])
     write_text(path, text, expected=None, replace=asked.replace)
-    output.result(f"{asked.file} written; open it with: schedtui {asked.file}\n")
+    name = visible(asked.file)
+    output.result(f"{name} written; open it with: schedtui {name}\n")
     return ExitStatus.CLEAR
 
 

@@ -7,6 +7,8 @@ for a bad value from a file: that is a bad cell, which is kept. Knows no keys.
 from __future__ import annotations
 
 import math
+import re
+import tomllib
 from dataclasses import dataclass
 from datetime import date, datetime
 from typing import TYPE_CHECKING, Any, Protocol
@@ -17,6 +19,10 @@ from schedtui.units import Quantity, System, read_amount
 
 if TYPE_CHECKING:
     from schedtui.schedule.catalogue.ranges import Range
+
+
+# A text in a list: within quotation marks, or up to the next comma.
+_PART = re.compile(r'\s*"(?:[^"\\]|\\.)*"(?=\s*(?:,|$))|[^,]+')
 
 
 class Kind(Protocol):
@@ -72,29 +78,29 @@ class NumberKind:
 
     def read(self, value: Any, raw: str, system: System) -> Typed:
         """Read a TOML integer or float; anything else is a bad cell."""
-        accepted = f"accepted: {self.accepted(system)}"
         if isinstance(value, bool) or not isinstance(value, int | float):
-            return _bad(value, raw, f"is not a number; {accepted}")
+            return _bad(value, raw, f"is not a number; accepted: {self.accepted(system)}")
         try:
             number = float(value)
         except OverflowError:
             number = math.inf
-        if not math.isfinite(number):
-            return _bad(None, raw, f"is not a finite number; {accepted}")
-        if self.whole and not isinstance(value, int):
-            return _bad(None, raw, f"is not a whole number; {accepted}")
-        limits = self.ip if system == "IP" else self.si
-        if not limits.holds(number):
-            return _bad(None, raw, f"is out of range; {accepted}")
+        wrong = self._wrong(number, self.ip if system == "IP" else self.si)
+        if wrong:
+            return _bad(None, raw, f"{wrong}; accepted: {self.accepted(system)}")
         return Typed(raw, number + 0.0, raw)  # adding 0.0 turns -0.0 into 0.0
+
+    def _wrong(self, number: float, limits: Range) -> str:
+        """Say what is wrong with a number, nothing where it can be accepted."""
+        if not math.isfinite(number):
+            return "is not a finite number"
+        if self.whole and not number.is_integer():
+            return "is not a whole number"
+        return "" if limits.holds(number) else "is out of range"
 
     def enter(self, text: str, system: System) -> Typed:
         """Read a number as typed, with or without a unit."""
-        stored = read_amount(text, self.quantity, system).text
-        value = float(stored)
-        return _refuse(
-            self.read(int(value) if self.whole and value.is_integer() else value, stored, system)
-        )
+        amount = read_amount(text, self.quantity, system)
+        return _refuse(self.read(amount.value, amount.text, system))
 
 
 @dataclass(frozen=True, slots=True)
@@ -180,7 +186,7 @@ class FlagKind:
 
 @dataclass(frozen=True, slots=True)
 class TextsKind:
-    """A list of texts, none of them blank."""
+    """A list of texts; one with a comma or a quotation mark in it stands in quotation marks."""
 
     def accepted(self, system: System) -> str:  # noqa: ARG002  texts have no units
         """Say that a list of texts is accepted."""
@@ -191,12 +197,31 @@ class TextsKind:
         if not isinstance(value, list) or not all(isinstance(one, str) for one in value):
             return _bad(value, raw, f"is no list of texts; accepted: {self.accepted(system)}")
         texts = tuple(value)
-        return Typed(", ".join(texts), texts, raw)
+        return Typed(", ".join(map(_listed, texts)), texts, raw)
 
     def enter(self, text: str, system: System) -> Typed:
-        """Take texts separated by commas."""
-        texts = tuple(part.strip() for part in text.split(",") if part.strip())
+        """Take texts separated by commas, those within quotation marks as they stand."""
+        parts = (part.strip() for part in _PART.findall(text))
+        texts = tuple(_unlisted(part) for part in parts if part)
         return self.read(list(texts), toml_texts(texts), system)
+
+
+def _listed(text: str) -> str:
+    """Return a text as it stands in a list: in quotation marks where it would else be torn.
+
+    >>> print(_listed("VFD by others"), _listed("VFD, by others"))
+    VFD by others "VFD, by others"
+    """
+    plain = text and text == text.strip() and not any(sign in text for sign in ',"\n')
+    return text if plain else toml_text(text)
+
+
+def _unlisted(part: str) -> str:
+    """Return a text from a list; quotation marks that enclose none are kept."""
+    try:
+        return str(tomllib.loads(f"a = {part}")["a"]) if part.startswith('"') else part
+    except tomllib.TOMLDecodeError:
+        return part
 
 
 @dataclass(frozen=True, slots=True)
@@ -216,10 +241,10 @@ class DateKind:
     def enter(self, text: str, system: System) -> Typed:
         """Take a day in the form year-month-day."""
         try:
-            value: Any = date.fromisoformat(text.strip())
+            day = date.fromisoformat(text.strip())
         except ValueError:
-            value = text
-        return _refuse(self.read(value, text.strip(), system))
+            return _refuse(self.read(text, text, system))
+        return self.read(day, day.isoformat(), system)
 
 
 @dataclass(frozen=True, slots=True)

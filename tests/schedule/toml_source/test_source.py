@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import re
 import tomllib
 from collections import Counter
 
@@ -27,6 +28,9 @@ def marked(values):
     return f"@bad:{values.raw}" if isinstance(values, BadValue) else values
 
 
+CONTROL = re.compile(r"[\x00-\x08\x0b\x0c\x0e-\x1f\x7f]|\r(?!\n)")
+
+
 def at(values, path):
     for key in path:
         values = values[key]
@@ -49,7 +53,9 @@ def assert_places_hold(text):
         elif isinstance(value, BadValue):
             assert (source.raw(path), source.line(path)) == (value.raw, value.line)
         elif "bad" not in repr(marked(value)):
-            alone = tomllib.loads(f"v = {source.raw(path)}")["v"]
+            # A control character in a comment inside a value is borne; the library refuses it.
+            raw = CONTROL.sub(" ", source.raw(path))
+            alone = tomllib.loads(f"v = {raw}")["v"]
             assert repr(alone) == repr(value)
     return source
 

@@ -28,9 +28,7 @@ class Identity(Table):
     plants = _unit.texts(
         "Plants", "PLANTS", "Plants that feed it; all of the matching season when not given."
     )
-    without = _unit.texts(
-        "Without", "WITHOUT", "Keys whose default does not hold for this unit.", own_only=True
-    )
+    without = _unit.texts("Without", "WITHOUT", "Keys whose default does not hold for this unit.")
     airflow_basis = _unit.choice_or_none(
         BASES, "Airflow basis", "BASIS", "What its airflows mean, if not what the project says."
     )
