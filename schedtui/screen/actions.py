@@ -16,7 +16,6 @@ class Action:
         name: the application's method is `action_` and this.
         key: the key that does it, as the library names it.
         shown: the key as people read it.
-        short: what it does, in a word for the hint line; empty to leave it out there.
         label: what it does, for the help.
         overriding: whether it works in the middle of an edit too.
     """
@@ -24,34 +23,56 @@ class Action:
     name: str
     key: str
     shown: str
-    short: str
     label: str
     overriding: bool = False
 
 
 ACTIONS: tuple[Action, ...] = (
-    Action("help", "f1", "F1", "help", "say what the keys do here", overriding=True),
-    Action("save", "ctrl+s", "ctrl+s", "save", "save the schedule", overriding=True),
-    Action("undo", "ctrl+z", "ctrl+z", "undo", "take the last step back"),
-    Action("redo", "ctrl+y", "ctrl+y", "redo", "do again what was taken back"),
-    Action("next_row", "ctrl+down", "ctrl+Down", "next", "go to the next unit to look at"),
-    Action("previous_row", "ctrl+up", "ctrl+Up", "", "go to the previous unit to look at"),
-    Action("turn_pane", "ctrl+p", "ctrl+p", "pane", "show the next page in the pane"),
-    Action("other_part", "ctrl+w", "ctrl+w", "", "go from table to pane, and back"),
-    Action("enlarge_pane", "ctrl+l", "ctrl+l", "", "the pane as large as the screen, and back"),
-    Action("leave", "ctrl+q", "ctrl+q", "quit", "quit", overriding=True),
+    Action("help", "f1", "F1", "this help, and back", overriding=True),
+    Action("next_finding", "ctrl+g", "ctrl+g", "go to the next finding, on the cell it blames"),
+    Action("next_row", "ctrl+down", "ctrl+Down", "go to the next unit to look at"),
+    Action("previous_row", "ctrl+up", "ctrl+Up", "go to the previous unit to look at"),
+    Action("undo", "ctrl+z", "ctrl+z", "take the last step back"),
+    Action("redo", "ctrl+y", "ctrl+y", "do again what was taken back"),
+    Action("turn_pane", "ctrl+p", "ctrl+p", "show the next page in the pane"),
+    Action("other_part", "ctrl+w", "ctrl+w", "go from table to pane, and back"),
+    Action("enlarge_pane", "ctrl+l", "ctrl+l", "the pane as large as the screen, and back"),
+    Action("save", "ctrl+s", "ctrl+s", "save the schedule", overriding=True),
+    Action("leave", "ctrl+q", "ctrl+q", "quit; asks where something is unsaved", overriding=True),
+    Action("stay", "ctrl+c", "ctrl+c", "nothing: it does not quit", overriding=True),
+    Action("to_table", "escape", "Esc", "from help or pane back to the table"),
 )
 
 # What the table does by itself.
 TABLE_KEYS: tuple[tuple[str, str], ...] = (
     ("arrows", "move from cell to cell"),
+    ("ctrl+Right, ctrl+Left", "first column of the next and previous group"),
     ("Home, End", "first and last column"),
     ("PgUp, PgDn", "a page up and down"),
     ("ctrl+Home, ctrl+End", "first and last unit"),
     ("Tab, shift+Tab", "next and previous cell that can be typed into"),
     ("any character", "type over the cell"),
     ("Enter, F2", "edit what stands in the cell"),
-    ("Enter while editing", "take the text and go down"),
-    ("Tab while editing", "take the text and go right"),
-    ("Esc while editing", "leave the cell as it was"),
+    ("Del", "clear the cell; do without a default"),
 )
+EDIT_KEYS: tuple[tuple[str, str], ...] = (
+    ("Enter", "take the text and go down"),
+    ("Tab, shift+Tab", "take the text and go right, left"),
+    ("Esc", "leave the cell as it was"),
+)
+PANE_KEYS: tuple[tuple[str, str], ...] = (
+    ("Up, Down, PgUp, PgDn", "scroll"),
+    ("Left, Right", "scroll sideways where there is more"),
+    ("Home, End", "the page's beginning and end"),
+)
+
+# What the hint line offers in each place, the most needed first.
+TABLE_HINT = (
+    *("F1 help", "Enter edit", "ctrl+g finding", "ctrl+q quit", "ctrl+s save"),
+    *("ctrl+p pane", "ctrl+z undo", "ctrl+Down next unit", "ctrl+w to pane"),
+)
+COMPUTED_HINT = ("F1 help", "Tab next cell", *TABLE_HINT[2:])
+EDIT_HINT = ("Enter takes", "Esc leaves", "Tab takes, goes right", "F1 help")
+PANE_HINT = ("F1 help", "ctrl+w table", "ctrl+p next page", "ctrl+l larger", "PgDn scroll")
+LARGE_HINT = ("F1 help", "ctrl+l smaller", "ctrl+p next page", "PgDn scroll")
+HELP_HINT = ("F1 back", "PgDn scroll")

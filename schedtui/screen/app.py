@@ -5,22 +5,23 @@ Turns keys into edits of the session and shows what its review then says. Comput
 
 from __future__ import annotations
 
+import asyncio
+import contextlib
+import signal
+from functools import partial
 from typing import TYPE_CHECKING, Any, ClassVar
 
 from textual.app import App, ComposeResult
 from textual.binding import Binding, BindingType
 from textual.containers import Container
+from textual.screen import ModalScreen
 
-from schedtui.errors import AmountError, SchedtuiError
-from schedtui.report.findings import short_counts, short_site
-from schedtui.report.page import Page
-from schedtui.report.unit import unit_air_page, unit_findings_page
-from schedtui.review.reviewed import CLEAR, UnitReview
+from schedtui.errors import AmountError, FileChanged, SchedtuiError
+from schedtui.screen import hints, looks, seek
 from schedtui.screen.actions import ACTIONS
-from schedtui.screen.bars import HINT_STYLE, TITLE_STYLE, Bar
-from schedtui.screen.detail_pane import DetailPane
+from schedtui.screen.around import Around
+from schedtui.screen.bars import HINT_STYLE, Bar
 from schedtui.screen.grid import Grid
-from schedtui.screen.help_page import help_page
 from schedtui.screen.question import Answer, Question
 from schedtui.screen.terse_update import terse
 from schedtui.screen.unit_table import UnitTable
@@ -28,17 +29,19 @@ from schedtui.screen.unit_table import UnitTable
 if TYPE_CHECKING:
     from collections.abc import Callable
 
+    from textual import events
     from textual.screen import Screen
 
+    from schedtui.screen import said
     from schedtui.session.session import Session
 
 _WIDE = 140  # columns from which the pane stands beside the table
+_LEAST = (60, 16)
 
-_PAGES: tuple[tuple[str, Callable[[UnitReview], Page]], ...] = (
-    ("Findings", unit_findings_page),
-    ("Air", unit_air_page),
-)
-_SAVE, _DROP, _STAY = "save", "drop", "stay"
+_SLICE = 0.008  # s that a key may have to wait while units are being reviewed
+_PAUSE = 0.001  # s in between, for keys and painting
+_SAVE, _DROP, _STAY, _OVER = "save", "drop", "stay", "over"
+_STAY_ANSWER = Answer("escape", "Esc", "stay", _STAY)
 
 
 class ScheduleApp(App[None]):
@@ -60,8 +63,17 @@ class ScheduleApp(App[None]):
         super().__init__()
         self._session = session
         self._table = UnitTable(session.review)
-        self._page = 0
-        self._helping = False
+        self._grid = Grid(self._table, empty="No unit yet.", tell=self._hear, id="units")
+        self._around = Around(session, self._table, self._grid)
+        self._begun_at: tuple[int, str] | None = None
+
+    def get_theme_variable_defaults(self) -> dict[str, str]:
+        """Give the style sheet the palette's colours."""
+        return {"ground": looks.SLATE, "faint": looks.ASH}
+
+    def check_action(self, action: str, parameters: tuple[object, ...]) -> bool | None:  # noqa: ARG002
+        """Leave every key to a question while one is asked."""
+        return not isinstance(self.screen, ModalScreen)
 
     def _display(self, screen: Screen[Any], renderable: Any) -> None:
         super()._display(screen, terse(renderable))
@@ -70,141 +82,192 @@ class ScheduleApp(App[None]):
 
     def compose(self) -> ComposeResult:
         """Lay out the title, the table, the pane and the hint."""
-        yield Bar(TITLE_STYLE, id="title")
+        yield self._around.title
         with Container(id="parts"):
-            yield Grid(self._table, empty="No unit yet.", id="units")
-            yield DetailPane(id="pane")
-        yield Bar(HINT_STYLE, id="hint")
+            yield self._grid
+            yield self._around.pane
+        yield self._around.bar
+        yield Bar(HINT_STYLE, id="small")
 
     def on_mount(self) -> None:
-        """Show the schedule."""
-        self._show_title()
-        self._show_pane()
-        self._show_keys()
+        """Show the schedule, the cursor on the worst that was found."""
+        small = "Terminal {} × {}: {} × {} needed."
+        bar = self.query_one("#small", Bar)
+        bar.show(lambda width: small.format(width, self.size.height, *_LEAST))
+        self._begun_at = self._grid.cursor
+        self._begin()
+        self._around.show_title()
+        self._around.show_pane()
+        if self._session.waiting:
+            self.set_timer(_PAUSE, self._go_on)
+        self._end_when_told()
+        problems = self._session.document.problems
+        if problems:
+            first = f"line {problems[0].line}: {problems[0]}"
+            self._around.hint(f"{len(problems)} to mend in the file, the first in {first}")
+        else:
+            self._around.show_hint()
+
+    def _go_on(self) -> None:
+        """Review some of the units that wait, then look after the keys again."""
+        self._show_changes(self._session.go_on(_SLICE))
+        if self._session.waiting:
+            self.set_timer(_PAUSE, self._go_on)
+        elif self._grid.cursor == self._begun_at and self._grid.editing is None:
+            self._around.show_pane()
+            self._begin()
+
+    def _end_when_told(self) -> None:
+        """Give the terminal back when the system asks the program to end."""
+        with contextlib.suppress(NotImplementedError, RuntimeError, ValueError):
+            end = partial(self.exit, return_code=128 + signal.SIGTERM)
+            asyncio.get_running_loop().add_signal_handler(signal.SIGTERM, end)
+
+    def _begin(self) -> None:
+        """Put the cursor on the worst that was found, if anything was."""
+        begin = seek.worst(self._session.review.units, self._column_keys)
+        if begin is not None:
+            self._grid.move_to(*begin)
+            self._begun_at = begin
+
+    def on_resize(self, event: events.Resize) -> None:
+        """Say how large the terminal must be while it is too small."""
+        fits = event.size.width >= _LEAST[0] and event.size.height >= _LEAST[1]
+        screen = self.screen_stack[0]
+        screen.set_class(not fits, "-small")
+        if fits and screen.focused is None:
+            self._focus_part()
 
     @property
-    def _grid(self) -> Grid:
-        return self.query_one("#units", Grid)
+    def _column_keys(self) -> frozenset[str]:
+        return frozenset(column.key for column in self._table.columns)
 
-    @property
-    def _pane(self) -> DetailPane:
-        return self.query_one("#pane", DetailPane)
+    # -- what is done in the table -----------------------------------------------------------
 
-    @property
-    def _reviewed(self) -> UnitReview | None:
-        """The unit under the cursor."""
-        cursor = self._grid.cursor
-        return self._session.review.units.get(cursor[0]) if cursor else None
+    def _hear(self, message: said.Said) -> None:
+        """Answer what a person did in the table; mostly by saying what is there now."""
+        match message:
+            case Grid.EditTaken():
+                self._take(message)
+            case Grid.ClearAsked():
+                self._clear(message)
+            case Grid.ReadOnly():
+                self._around.hint(f"Not to be typed into. {self._around.about()}")
+            case Grid.CursorMoved():
+                self._around.show_pane()
+                self._around.show_hint()
+            case _:
+                self._around.show_hint()
 
-    def _show_title(self) -> None:
-        session = self._session
-        unsaved = " *unsaved*" if session.unsaved else ""
-        title = session.schedule.project.title or "No title"
-        left = f"{session.path.name}{unsaved}  {short_site(session.review)}  {title}"
-        self.query_one("#title", Bar).show(left, short_counts(session.review))
+    def _take(self, message: said.EditTaken) -> None:
+        """Take what was typed, or say beside the cell why it cannot be taken."""
+        grid, row_id, key = message.grid, message.row_key, message.column_key
+        if message.touched:
+            try:
+                self._do(row_id, lambda: self._session.set_cell("unit", row_id, key, message.text))
+            except AmountError as error:
+                grid.refuse(str(error))
+                self._around.hint(f"Not taken: {error}")
+                return
+        grid.end_edit(message.then)
+        if self._grid.cursor == (row_id, key):  # else it is shown since the cursor has moved
+            self._around.show_pane()
+            self._around.show_hint()
 
-    def _show_pane(self) -> None:
-        if self._helping:
-            self._pane.show(help_page())
-            return
-        reviewed = self._reviewed
-        self._pane.show(_PAGES[self._page][1](reviewed) if reviewed else Page(()))
+    def _clear(self, message: said.ClearAsked) -> None:
+        """Clear a cell of the unit's own; ask about one that comes from the defaults."""
+        row_id, key = message.row_key, message.column_key
+        unit = self._session.review.units[row_id].unit
+        inherited = unit.inherited.get(key)
+        if key in unit.own:
+            try:
+                self._do(row_id, lambda: self._session.set_cell("unit", row_id, key, ""))
+            except AmountError as error:
+                self._around.answer = (
+                    f"Not cleared: {self._session.field('unit', key).label} {error}"
+                )
+            self._around.show_pane()
+            self._around.show_hint()
+        elif inherited is None:
+            self._around.hint("Nothing to clear here")
+        else:
+            self._ask_without(row_id, key, inherited.text)
 
-    def _show_keys(self) -> None:
-        keys = "  ".join(f"{one.shown} {one.short}" for one in ACTIONS if one.short)
-        self._hint(f"Type or Enter to edit  {keys}")
+    def _ask_without(self, row_id: int, key: str, text: str) -> None:
+        label = self._session.review.units[row_id].label
+        field = self._session.field("unit", key)
 
-    def _hint(self, left: str, right: str = "") -> None:
-        self.query_one("#hint", Bar).show(left, right)
+        def answered(answer: str | None) -> None:
+            if answer == _DROP:
+                self._do(row_id, lambda: self._session.without_default(row_id, key))
+                self._around.show_pane()
+                self._around.show_hint()
+
+        says = f"{field.label} {text} comes from [defaults], which hold for every unit."
+        without = Answer("enter", "Enter", f"do without it for {label}", _DROP)
+        self.push_screen(Question(says, (without, _STAY_ANSWER)), answered)
+
+    def _do(self, row_id: int, edit: Callable[[], frozenset[int]]) -> None:
+        """Carry out an edit, show what it makes of the review, and remember to say so."""
+        before = self._session.review.units[row_id].status
+        changed = edit()
+        after = self._session.review.units[row_id]
+        if changed:
+            self._around.answer = hints.answer(after.label, before, after.status)
+        self._show_changes(changed)
 
     def _show_changes(self, changed: frozenset[int]) -> None:
-        """Show what an edit has made of the review."""
         columns = self._table.show(self._session.review, changed)
+        self._around.tally.show(self._session.review, changed)
         self._grid.source_changed(rows=changed, columns=columns)
-        self._show_title()
-        self._show_pane()
-
-    # -- the table's messages --------------------------------------------------------------
-
-    def on_grid_cursor_moved(self, message: Grid.CursorMoved) -> None:
-        """Say what the cell holds, and show its unit in the pane."""
-        self._show_pane()
-        self._hint(*self._about(message.column_key))
-
-    def on_grid_edit_begun(self, message: Grid.EditBegun) -> None:
-        """Say what the cell accepts."""
-        self._hint(*self._accepted(message.column_key))
-
-    def on_grid_edit_changed(self, message: Grid.EditChanged) -> None:
-        """Say what a number typed with a unit becomes, before it is taken."""
-        cursor = self._grid.cursor
-        if cursor is not None:
-            note = self._session.conversion("unit", cursor[1], message.text)
-            left, right = self._accepted(cursor[1])
-            self._hint(note or left, right)
-
-    def on_grid_edit_left(self, message: Grid.EditLeft) -> None:
-        """Say again what the cell holds."""
-        self._hint(*self._about(message.column_key))
-
-    def on_grid_read_only(self, message: Grid.ReadOnly) -> None:
-        """Say what a computed cell is computed from."""
-        self._hint(*self._about(message.column_key))
-
-    def on_grid_edit_taken(self, message: Grid.EditTaken) -> None:
-        """Take what was typed, or say beside the cell why it cannot be taken."""
-        grid = message.grid
-        try:
-            changed = self._session.set_cell(
-                "unit", message.row_key, message.column_key, message.text
-            )
-        except AmountError as error:
-            grid.refuse(str(error))
-            return
-        self._show_changes(changed)
-        grid.end_edit(message.then)
-
-    def _about(self, column_key: str) -> tuple[str, str]:
-        computed = self._table.computed(column_key)
-        if computed is not None:
-            return f"{computed.label}: computed from {computed.of}", "computed"
-        if column_key == "mark":
-            reviewed = self._reviewed
-            return (reviewed.status if reviewed else ""), ""
-        field = self._session.field("unit", column_key)
-        return f"{field.label}: {field.doc}", f"{field.key}, F1 help"
-
-    def _accepted(self, column_key: str) -> tuple[str, str]:
-        field = self._session.field("unit", column_key)
-        accepted = field.kind.accepted(self._session.document.system)
-        return f"{field.label}, {accepted}: {field.doc}", "Enter takes, Esc leaves"
+        self._around.show_title()
 
     # -- actions ---------------------------------------------------------------------------
 
     def action_help(self) -> None:
-        """Show the help in the pane, or put it away."""
-        self._helping = not self._helping
-        self._show_pane()
-        if self._helping:
-            self._pane.focus()
-        else:
-            self._grid.focus()
+        """Show the help as large as the screen, or put it away."""
+        self._around.helping = not self._around.helping
+        self.screen.set_class(self._around.helping, "-enlarged")
+        self._around.show_pane()
+        self._focus_part()
+
+    def action_to_table(self) -> None:
+        """Go back to the table."""
+        self._around.helping = False
+        self.screen.remove_class("-enlarged")
+        self._around.show_pane()
+        self._grid.focus()
+
+    def action_stay(self) -> None:
+        """Say how to quit."""
+        self._around.hint("ctrl+c does not quit; ctrl+q does")
+
+    def _focus_part(self) -> None:
+        (self._around.pane if self.screen.has_class("-enlarged") else self._grid).focus()
+
+    def on_descendant_focus(self) -> None:
+        """Say what the keys do in the part that has them now."""
+        self._around.show_hint()
 
     def action_save(self) -> None:
         """Save, or say why that is not possible."""
         self._save()
 
-    def _save(self) -> bool:
+    def _save(self, *, over: bool = False) -> bool:
         if self._grid.editing is not None:
-            self._hint("Enter or Esc first: a cell is being edited")
+            self._around.hint("Enter or Esc first: a cell is being edited")
             return False
         try:
-            self._session.save()
-        except SchedtuiError as error:
-            self._hint(f"Not saved: {error}")
+            self._session.save(over=over)
+        except FileChanged as error:
+            overwrite = Answer("o", "o", "write over it what is here", _OVER)
+            self.push_screen(Question(f"{error}.", (_STAY_ANSWER, overwrite)), self._answered)
             return False
-        self._show_title()
-        self._hint(f"Saved {self._session.path}")
+        except SchedtuiError as error:
+            self._around.hint(f"Not saved: {error}")
+            return False
+        self._around.show_title()
+        self._around.hint(f"Saved {self._session.path}")
         return True
 
     def action_undo(self) -> None:
@@ -219,56 +282,70 @@ class ScheduleApp(App[None]):
         self, turn: Callable[[], tuple[Any, frozenset[int]] | None], done: str, nothing: str
     ) -> None:
         if self._grid.editing is not None:
+            self._around.hint("Enter or Esc first: a cell is being edited")
             return
         turned = turn()
         if turned is None:
-            self._hint(nothing)
+            self._around.hint(nothing)
             return
         step, changed = turned
         self._show_changes(changed)
-        self._hint(f"{done}: {step.name}")
+        for row_id, key in self._session.cells_of(step):
+            if key in self._column_keys:
+                self._grid.move_to(row_id, key)
+        self._around.show_pane()
+        self._around.hint(f"{done}: {step.name}")
 
     def action_next_row(self) -> None:
         """Go to the next unit to look at."""
-        self._seek(1)
+        self._seek_unit(1)
 
     def action_previous_row(self) -> None:
         """Go to the previous unit to look at."""
-        self._seek(-1)
+        self._seek_unit(-1)
 
-    def _seek(self, direction: int) -> None:
-        grid, units = self._grid, self._session.review.units
-        if grid.cursor is None or grid.editing is not None:
+    def _seek_unit(self, direction: int) -> None:
+        cursor = self._grid.cursor
+        if cursor is None or self._grid.editing is not None:
             return
-        row_key, column_key = grid.cursor
-        order = list(units)[::direction]
-        here = order.index(row_key)
-        for candidate in (*order[here + 1 :], *order[:here]):
-            if units[candidate].status != CLEAR:
-                grid.move_to(candidate, column_key)
-                return
-        self._hint("No other unit to look at")
+        found = seek.next_unit(self._session.review.units, cursor[0], direction)
+        if found is None:
+            self._around.hint("No other unit to look at")
+        else:
+            self._grid.move_to(found, cursor[1])
+
+    def action_next_finding(self) -> None:
+        """Go to the next cell that a finding blames."""
+        cursor = self._grid.cursor
+        if cursor is None or self._grid.editing is not None:
+            return
+        found = seek.next_finding(self._session.review.units, *cursor, self._column_keys)
+        if found is None:
+            self._around.hint("Nothing found in any unit")
+        else:
+            self._grid.move_to(*found)
 
     def action_turn_pane(self) -> None:
         """Show the next page in the pane."""
-        self._helping = False
-        self._page = (self._page + 1) % len(_PAGES)
-        self._show_pane()
+        if self._around.helping:
+            self.action_to_table()
+            return
+        self._around.turn_page()
 
     def action_other_part(self) -> None:
         """Go from the table to the pane, and back."""
-        if self._grid.has_focus:
-            self._pane.focus()
-        else:
-            self._grid.focus()
+        if self._grid.has_focus and self._grid.editing is None:
+            self._around.pane.focus()
+        elif self._around.pane.has_focus:
+            self.action_to_table()
 
     def action_enlarge_pane(self) -> None:
         """Make the pane as large as the screen, or as small as it was."""
-        self.screen.toggle_class("-enlarged")
         if self.screen.has_class("-enlarged"):
-            self._pane.focus()
-        else:
-            self._grid.focus()
+            self.action_to_table()
+        elif self._grid.editing is None:
+            self.screen.add_class("-enlarged")
+            self._focus_part()
 
     def action_leave(self) -> None:
         """Quit, asking first where something is unsaved."""
@@ -278,11 +355,13 @@ class ScheduleApp(App[None]):
         answers = (
             Answer("enter", "Enter", "save and quit", _SAVE),
             Answer("d", "d", "quit and drop the changes", _DROP),
-            Answer("escape", "Esc", "stay", _STAY),
+            _STAY_ANSWER,
         )
         name = self._session.path.name
         self.push_screen(Question(f"{name} has unsaved changes.", answers), self._answered)
 
     def _answered(self, answer: str | None) -> None:
-        if answer == _DROP or (answer == _SAVE and self._save()):
+        if answer == _OVER:
+            self._save(over=True)
+        elif answer == _DROP or (answer == _SAVE and self._save()):
             self.exit()

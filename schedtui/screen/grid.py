@@ -7,13 +7,12 @@ Must not know of schedules.
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING, ClassVar, Literal
+from typing import TYPE_CHECKING, ClassVar, TypeAlias
 
 from textual.geometry import Region
-from textual.message import Message
 from textual.scroll_view import ScrollView
 
-from schedtui.screen import looks
+from schedtui.screen import looks, said
 from schedtui.screen.cell_editor import EDIT_KEYS, CellEdit
 from schedtui.screen.painter import HEADING_LINES, EditField, TableSource, edit_over
 from schedtui.screen.viewport import Viewport
@@ -24,7 +23,8 @@ if TYPE_CHECKING:
     from textual import events
     from textual.strip import Strip
 
-Then = Literal["down", "right", "left", "stay"]
+    from schedtui.screen.said import Then
+
 _TAKES: dict[str, Then] = {"enter": "down", "tab": "right", "shift+tab": "left"}
 _WHEEL_ROWS = 3
 
@@ -36,6 +36,8 @@ class Grid(ScrollView, can_focus=True):
         source: what is drawn.
         empty: what is said where there are no rows.
         edit_text: the text an edit of what is there begins with; the cell's text if not given.
+        tell: is told at once what the person did, so that what follows from it is painted in one
+            frame with what the grid paints; if not given, messages are posted.
         id: the widget's name in the screen.
     """
 
@@ -48,58 +50,13 @@ class Grid(ScrollView, can_focus=True):
     }}
     """
 
-    class Said(Message):
-        """What the grid says; each message has the grid as its `control`."""
-
-        def __init__(self, grid: Grid) -> None:
-            super().__init__()
-            self.grid = grid
-
-        @property
-        def control(self) -> Grid:
-            """The grid that says it."""
-            return self.grid
-
-    class AtCell(Said):
-        """What is about one cell."""
-
-        def __init__(self, grid: Grid, row_key: int, column_key: str) -> None:
-            super().__init__(grid)
-            self.row_key = row_key
-            self.column_key = column_key
-
-    class CursorMoved(AtCell):
-        """The cursor is on another cell."""
-
-    class EditBegun(AtCell):
-        """An edit of this cell was opened."""
-
-    class EditLeft(AtCell):
-        """The edit was given up; the cell is as it was."""
-
-    class EditTaken(AtCell):
-        """The text is offered; the edit stays open until `end_edit` is called."""
-
-        def __init__(
-            self, grid: Grid, row_key: int, column_key: str, text: str, then: Then
-        ) -> None:
-            super().__init__(grid, row_key, column_key)
-            self.text = text
-            self.then: Then = then
-
-    class EditChanged(Said):
-        """The text of the edit is another."""
-
-        def __init__(self, grid: Grid, text: str) -> None:
-            super().__init__(grid)
-            self.text = text
-
-    class ReadOnly(Said):
-        """An edit was asked for where nothing can be typed."""
-
-        def __init__(self, grid: Grid, column_key: str) -> None:
-            super().__init__(grid)
-            self.column_key = column_key
+    CursorMoved: TypeAlias = said.CursorMoved
+    EditBegun: TypeAlias = said.EditBegun
+    EditLeft: TypeAlias = said.EditLeft
+    EditTaken: TypeAlias = said.EditTaken
+    EditChanged: TypeAlias = said.EditChanged
+    ClearAsked: TypeAlias = said.ClearAsked
+    ReadOnly: TypeAlias = said.ReadOnly
 
     def __init__(
         self,
@@ -107,12 +64,15 @@ class Grid(ScrollView, can_focus=True):
         *,
         empty: str = "Nothing here yet.",
         edit_text: Callable[[int, str], str] | None = None,
+        tell: Callable[[said.Said], object] | None = None,
         id: str | None = None,  # noqa: A002 - the library's name for it
     ) -> None:
         super().__init__(id=id)
         self._view = Viewport(source, empty)
         self._edit_text = edit_text or (lambda row, column: source.cell(row, column).text)
+        self._tell: Callable[[said.Said], object] = tell or self.post_message
         self._edit: CellEdit | None = None
+        self._begun_with: str | None = None
         self._field: EditField | None = None
         view = self._view
         self._keys: dict[str, Callable[[], None]] = {
@@ -126,10 +86,13 @@ class Grid(ScrollView, can_focus=True):
             "pagedown": lambda: self._turn_page(1),
             "ctrl+home": lambda: self._go(0, view.column),
             "ctrl+end": lambda: self._go(len(view.rows) - 1, view.column),
+            "ctrl+right": lambda: self._go(view.row, view.next_group(1)),
+            "ctrl+left": lambda: self._go(view.row, view.next_group(-1)),
             "tab": lambda: self._tab(1),
             "shift+tab": lambda: self._tab(-1),
             "enter": self._edit_what_is_there,
             "f2": self._edit_what_is_there,
+            "delete": self._ask_to_clear,
         }
 
     # -- what it shows ---------------------------------------------------------------------
@@ -242,7 +205,7 @@ class Grid(ScrollView, can_focus=True):
     def _tell_if_moved(self, before: tuple[int, str] | None) -> None:
         now = self.cursor
         if now is not None and now != before:
-            self.post_message(self.CursorMoved(self, *now))
+            self._tell(self.CursorMoved(self, *now))
 
     # -- editing ---------------------------------------------------------------------------
 
@@ -257,13 +220,14 @@ class Grid(ScrollView, can_focus=True):
         if cursor is None:
             return
         if self._view.columns[self._view.column].computed:
-            self.post_message(self.ReadOnly(self, cursor[1]))
+            self._tell(self.ReadOnly(self, *cursor))
             return
         self._scroll_as_needed()
+        self._begun_with = None if replace else text
         self._show_edit(CellEdit.of(text))
-        self.post_message(self.EditBegun(self, *cursor))
+        self._tell(self.EditBegun(self, *cursor))
         if replace:
-            self.post_message(self.EditChanged(self, text))
+            self._tell(self.EditChanged(self, text))
 
     def end_edit(self, then: Then = "stay") -> None:
         """Close the edit, whatever became of its text, and move on."""
@@ -275,6 +239,12 @@ class Grid(ScrollView, can_focus=True):
         """Say beside the cell why the edit's text cannot be accepted; the edit stays open."""
         if self._edit is not None:
             self._show_edit(self._edit.refuse(why))
+
+    def _ask_to_clear(self) -> None:
+        cursor = self.cursor
+        if cursor is not None:
+            computed = self._view.columns[self._view.column].computed
+            self._tell((self.ReadOnly if computed else self.ClearAsked)(self, *cursor))
 
     def _edit_what_is_there(self) -> None:
         if self.cursor is not None:
@@ -298,7 +268,7 @@ class Grid(ScrollView, can_focus=True):
             return
         self._show_edit(edit)
         if before is None or edit.text != before.text:
-            self.post_message(self.EditChanged(self, edit.text))
+            self._tell(self.EditChanged(self, edit.text))
 
     # -- keys and mouse --------------------------------------------------------------------
 
@@ -324,10 +294,11 @@ class Grid(ScrollView, can_focus=True):
         if edit is None or cursor is None:
             return False
         if event.key in _TAKES:
-            self.post_message(self.EditTaken(self, *cursor, edit.text, _TAKES[event.key]))
+            then, touched = _TAKES[event.key], self._begun_with != edit.text
+            self._tell(self.EditTaken(self, *cursor, edit.text, then, touched=touched))
         elif event.key == "escape":
             self.end_edit()
-            self.post_message(self.EditLeft(self, *cursor))
+            self._tell(self.EditLeft(self, *cursor))
         elif event.key in EDIT_KEYS:
             self._change_edit(EDIT_KEYS[event.key](edit))
         elif event.is_printable and event.character is not None:

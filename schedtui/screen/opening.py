@@ -2,12 +2,15 @@
 
 from __future__ import annotations
 
+import gc
 import os
 import sys
 from pathlib import Path
 
 from schedtui.errors import UsageError
 from schedtui.session.session import Session
+
+_AT_ONCE = 60  # units reviewed before the first is shown: as many as any screen has lines
 
 
 def open_schedule(file: str) -> int:
@@ -28,9 +31,14 @@ def open_schedule(file: str) -> int:
         raise UsageError(
             f"schedtui needs a terminal that can move a cursor; without one: schedtui check {file}"
         )
-    session = Session.open(Path(file))
+    # What is made now lasts: looking through it for garbage would cost a tenth of the start, and
+    # with thousands of units a third of a second in the middle of somebody's typing.
+    gc.disable()
+    session = Session.open(Path(file), _AT_ONCE)
     from schedtui.screen.app import ScheduleApp  # noqa: PLC0415  loaded when there is a terminal
 
     app = ScheduleApp(session)
+    gc.freeze()
+    gc.enable()
     app.run()
     return app.return_code or 0

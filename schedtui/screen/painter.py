@@ -42,6 +42,7 @@ __all__ = [
     "Place",
     "TableSource",
     "arrange",
+    "changed_cells",
     "column_width",
     "cursor_over",
     "edit_over",
@@ -252,11 +253,17 @@ class EditField:
         start, end = min(self.x, other.x), max(self.end, other.end)
         if self.x != other.x:
             return start, end
-        mine, theirs = _one_by_one(self.strip), _one_by_one(other.strip)
-        start += _same(mine, theirs)
-        if self.end == other.end:
-            end -= _same(reversed(mine), reversed(theirs))
-        return start, max(start, end)
+        first, last = changed_cells(self.strip, other.strip)
+        return start + first, start + last
+
+
+def changed_cells(old: Strip, new: Strip) -> tuple[int, int]:
+    """Return the first cell in which two lines differ, and where that ends."""
+    some, others = _one_by_one(old), _one_by_one(new)
+    start, end = _same(some, others), max(old.cell_length, new.cell_length)
+    if old.cell_length == new.cell_length:
+        end -= _same(reversed(some), reversed(others))
+    return start, max(start, end)
 
 
 def _one_by_one(strip: Strip) -> list[tuple[str, Style | None]]:

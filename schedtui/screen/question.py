@@ -45,7 +45,7 @@ class Question(ModalScreen[str]):
     """
 
     DEFAULT_CSS: ClassVar[str] = f"""
-    Question {{ align: center middle; background: {looks.SLATE} 60%; }}
+    Question {{ align: center middle; }}
     Question > Vertical {{
         width: 60; max-width: 90%; height: auto; padding: 1 2;
         background: {looks.SHALE}; color: {looks.CHALK};

@@ -11,30 +11,30 @@ from typing import TYPE_CHECKING
 from schedtui.review.figure import known
 from schedtui.review.finding import Severity
 from schedtui.review.quantities import COLUMNS, ComputedColumn
-from schedtui.review.reviewed import UNREADABLE, Review, UnitReview
+from schedtui.review.reviewed import CLEAR, UNREADABLE, Review, UnitReview
 from schedtui.schedule.catalogue.column import own_field
 from schedtui.schedule.catalogue.field import Field, Group
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.screen.layout import Column, column_width
-from schedtui.screen.looks import MARK_WIDTH, Look
+from schedtui.screen.looks import MARK_WIDTH, Look, mark_of
 from schedtui.screen.painter import Cell
 from schedtui.text_width import visible, width_of
 from schedtui.units import format_number
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator, Sequence
+    from collections.abc import Iterable, Iterator, Sequence
 
 MARK = "mark"
 _WIDEST = 24
 _NUMBER_WIDTH = 6
 
 _MARKS = {
+    UNREADABLE: Look.MARK_UNREADABLE,
     "short": Look.MARK_SHORT,
     "conflict": Look.MARK_CONFLICT,
     "caution": Look.MARK_CAUTION,
     "missing": Look.MARK_MISSING,
-    "clear": Look.MARK_CLEAR,
-    UNREADABLE: Look.MARK_UNREADABLE,
+    CLEAR: Look.MARK_CLEAR,
 }
 # How a cell looks that a finding of this severity blames.
 _BLAME = {
@@ -57,9 +57,10 @@ class UnitTable:
     def __init__(self, review: Review) -> None:
         self._review = review
         self._versions: dict[int, int] = {}
-        self.row_keys: Sequence[int] = ()
-        self.columns: Sequence[Column] = ()
-        self.show(review, frozenset())
+        self._widths: dict[str, int] = {}
+        self.row_keys: Sequence[int] = tuple(review.units)
+        self._measure(review.units)
+        self.columns: Sequence[Column] = tuple(self._made_columns())
 
     def show(self, review: Review, changed: frozenset[int]) -> bool:
         """Show another review of the same schedule, and tell whether the columns are others.
@@ -68,10 +69,14 @@ class UnitTable:
             review: the review.
             changed: the units that have to be painted anew.
         """
+        own_before = self._review.schedule.document.rows("column")
         self._review = review
         self.row_keys = tuple(review.units)
         for row_id in changed:
             self._versions[row_id] = self.version(row_id) + 1
+        widened = self._measure(changed)
+        if not widened and review.schedule.document.rows("column") == own_before:
+            return False
         columns = tuple(self._made_columns())
         same = columns == self.columns
         self.columns = columns
@@ -93,6 +98,21 @@ class UnitTable:
     def computed(self, column_key: str) -> ComputedColumn | None:
         """Return the entry of a computed column, None for a column of what is scheduled."""
         return _COMPUTED.get(column_key)
+
+    def _measure(self, row_ids: Iterable[int]) -> bool:
+        """Take in how wide the rows' texts are, and tell whether a column has become wider.
+
+        A column never becomes narrower or goes while the schedule is open: the table would jump.
+        """
+        before = dict(self._widths)
+        for row_id in row_ids:
+            unit = self._review.units[row_id].unit
+            for cells in (unit.inherited, unit.own):
+                for key, cell in cells.items():
+                    width = width_of(visible(cell.text))
+                    if width > self._widths.get(key, -1):
+                        self._widths[key] = width
+        return self._widths != before
 
     def _made_columns(self) -> Iterator[Column]:
         system = self._review.schedule.system
@@ -127,13 +147,11 @@ class UnitTable:
 
     def _fields(self) -> list[Field[object]]:
         """Return the fields to show: always the core ones, others where some unit states them."""
-        stated = {key for one in self._review.units.values()
-                  for key in (*one.unit.own, *one.unit.inherited)}  # fmt: skip
         anchors = {column.after for column in COLUMNS}
         fields: list[Field[object]] = [
             field
             for key, field in Unit.catalogue.items()
-            if field.core or key in stated or key in anchors
+            if field.core or key in self._widths or key in anchors
         ]
         fields += [own_field(column) for column in self._review.schedule.columns]  # type: ignore[misc]
         places = {group: place for place, group in enumerate(Group)}
@@ -142,8 +160,7 @@ class UnitTable:
     def _text_width(self, field: Field[object]) -> int:
         """Return the cells that the widest text of a field takes, within reason."""
         least = _NUMBER_WIDTH if field.quantity else 0
-        texts = (one.unit.typed(field.key) for one in self._review.units.values())
-        widest = max((width_of(visible(cell.text)) for cell in texts if cell), default=0)
+        widest = self._widths.get(field.key, 0)
         return min(max(widest, least), _WIDEST)
 
 
@@ -179,3 +196,8 @@ def _computed_cell(reviewed: UnitReview, column: ComputedColumn) -> Cell:
     )
     falls = short and column.key.endswith("_margin")
     return Cell(text, Look.FALLS_SHORT if falls else Look.COMPUTED)
+
+
+def mark_of_status(status: str) -> str:
+    """Return the mark that a row in this state carries."""
+    return mark_of(_MARKS[status])

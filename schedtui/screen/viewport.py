@@ -119,6 +119,15 @@ class Viewport:
         ahead = range(column + direction, end, direction)
         return next((i for i in ahead if not self.columns[i].computed), max(0, column))
 
+    def next_group(self, direction: int) -> int:
+        """Return the first column of the next group of columns, or the outermost column."""
+        groups = [column.group for column in self.columns]
+        starts = [i for i in range(1, len(groups)) if groups[i] != groups[i - 1]]
+        starts.insert(0, self.next_typed(-1, 1))
+        ahead = [i for i in starts if (i - self.column) * direction > 0]
+        outermost = len(self.columns) - 1 if direction > 0 else self.next_typed(-1, 1)
+        return (ahead[0] if direction > 0 else ahead[-1]) if ahead else outermost
+
     # -- taking what the source has --------------------------------------------------------
 
     def read_rows(self) -> bool:
@@ -147,6 +156,8 @@ class Viewport:
 
     def resize(self, width: int, height: int) -> None:
         """Take a new size in cells."""
+        if not self._height:  # shown for the first time: from the top, whatever was looked for
+            self.top = self._first = 0
         self._width, self._height = width, height
 
     def turn_page(self, pages: int) -> bool:

@@ -23,6 +23,8 @@ if TYPE_CHECKING:
 #: What pyte takes for text: queries and modes with an intermediate or private sign.
 _UNKNOWN = re.compile(rb"\x1b\[[<>=?]?[0-9;]*(?:\$p|u)|\x1b\[>[0-9;]*[a-z]")
 
+_KEPT = 1 << 16  # bytes received last
+
 KEYS = {
     "up": "\x1b[A",
     "down": "\x1b[B",
@@ -67,6 +69,8 @@ class Terminal:
         self._stream = pyte.ByteStream(self.screen)
         self._keeps_frames = keeps_frames
         self.ended = False
+        self.received = b""
+        self.status: int | None = None
         given = {"TERM": "xterm-256color", "COLORTERM": "truecolor", **(environment or {})}
         inherited = {name: text for name, text in os.environ.items() if name != "NO_COLOR"}
         self.started = time.perf_counter()
@@ -80,9 +84,10 @@ class Terminal:
         return self
 
     def __exit__(self, *_: object) -> None:
-        with contextlib.suppress(ProcessLookupError):
-            os.kill(self.pid, signal.SIGKILL)
-        os.waitpid(self.pid, 0)
+        if self.status is None:
+            with contextlib.suppress(ProcessLookupError):
+                os.kill(self.pid, signal.SIGKILL)
+            os.waitpid(self.pid, 0)
         os.close(self._fd)
 
     def read(self, seconds: float) -> bytes:
@@ -96,6 +101,7 @@ class Terminal:
             return b""
         if self._keeps_frames and b"?2026$p" in got:
             os.write(self._fd, b"\x1b[?2026;2$y")
+        self.received = (self.received + got)[-_KEPT:]
         self._stream.feed(_UNKNOWN.sub(b"", got))
         return got
 
@@ -122,6 +128,22 @@ class Terminal:
                 raise TimeoutError(message)
             self.read(0.05)
         return time.perf_counter() - self.started
+
+    def wait_for_end(self, seconds: float = 20) -> int:
+        """Wait until the program has ended by itself; return its exit status."""
+        end = time.perf_counter() + seconds
+        while self.status is None:
+            if time.perf_counter() > end:
+                message = f"goes on after {seconds} s:\n{self.text.rstrip()}"
+                raise TimeoutError(message)
+            if self.ended or not self.read(0.05):
+                time.sleep(0.02)
+            pid, status = os.waitpid(self.pid, os.WNOHANG)
+            if pid:
+                self.status = os.waitstatus_to_exitcode(status)
+                while self.read(0.05):  # its last words
+                    pass
+        return self.status
 
     @property
     def text(self) -> str:
