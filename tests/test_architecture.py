@@ -13,6 +13,7 @@ import pytest
 ROOT = Path(__file__).parents[1]
 PACKAGE = ROOT / "schedtui"
 TESTS = ROOT / "tests"
+PROJECTS = sorted((ROOT / "projects").glob("*.toml"))
 
 SHIPPED = {
     "DEVELOPERS.md",
@@ -31,7 +32,13 @@ HEAVY = ("textual", "pint", "openpyxl", "numpy")
 
 # Tests of more than one module, which have none to mirror: of the tree, and of a package as a
 # whole against an outside source.
-OF_THE_WHOLE = {"test_architecture.py", "air/test_published.py", "air/test_real_gas.py"}
+OF_THE_WHOLE = {
+    "test_architecture.py",
+    "test_readme.py",
+    "air/test_published.py",
+    "air/test_real_gas.py",
+    "review/test_rows.py",
+}
 OF_THE_WHOLE_FOLDERS = {"benchmarks", "projects", "slow", "terminal"}
 
 
@@ -86,6 +93,17 @@ def test_a_number_without_a_unit_does_not_load_pint_and_one_with_a_unit_does():
     assert "pint" in heavy_after(reading.format("3.2 kW"))["the end"]
 
 
+@pytest.mark.parametrize("form", ["text", "json", "csv", "markdown"])
+@pytest.mark.parametrize("file", PROJECTS, ids=lambda path: path.name)
+def test_a_check_loads_no_heavy_library(file, form):
+    checking = f"""
+from schedtui.cli.main import run
+status = run(["check", {str(file)!r}, "--format", {form!r}, "--fail-on", "never"], None)
+assert status == 0, status
+"""
+    assert heavy_after(checking) == {}
+
+
 def top_level() -> set[str]:
     """Return the names at the top of the project, without hidden ones."""
     git = ["git", "-C", str(ROOT)]
@@ -112,8 +130,9 @@ def test_the_top_of_the_project_holds_what_it_should_and_nothing_else():
     assert top_level() == SHIPPED
 
 
-def test_the_package_has_modules():
+def test_the_project_has_modules_and_schedules():
     assert len(MODULES) > 10
+    assert len(PROJECTS) > 0
     assert len(TEST_MODULES) > 5
 
 

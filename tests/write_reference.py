@@ -1,4 +1,7 @@
-"""Writes the reference tables of README.md between their markers: python tests/write_reference.py."""
+"""Writes the reference tables of README.md: python tests/write_reference.py.
+
+Each stands between markers there, and is made from the place in the code that defines it.
+"""
 
 from __future__ import annotations
 
@@ -27,7 +30,10 @@ def commands_table() -> Table:
 def tables() -> dict[str, Table]:
     """Return every reference table by the name in its markers."""
     keys = {name: keys_table(catalogue) for name, catalogue in CATALOGUES.items()}
-    for elsewhere in ("limits", "defaults"):  # limits have a table of their own; defaults are a unit's
+    for elsewhere in (
+        "limits",
+        "defaults",
+    ):  # limits have a table of their own; defaults are a unit's
         del keys[elsewhere]
     return {
         **keys,

@@ -2,19 +2,29 @@
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING, Any
+from typing import TYPE_CHECKING, Any, TypeVar
 
 from schedtui.report.page import CAUTION
 from schedtui.review.cooling import Cooling
 from schedtui.review.figure import known
-from schedtui.review.quantities import COOLING_FIGURES, COOLING_STATES, HEATING_STATES
+from schedtui.review.finding import margin
+from schedtui.review.quantities import (
+    COOLING_FIGURES,
+    COOLING_STATES,
+    HEATING_FIGURES,
+    HEATING_STATES,
+    UNIT_FIGURES,
+)
 from schedtui.schedule.load import FORMAT
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
     from schedtui.review.finding import Finding
     from schedtui.review.heating import Heating
-    from schedtui.review.reviewed import Review, UnitReview
+    from schedtui.review.quantities import Figure
+    from schedtui.review.reviewed import PlantReview, Review, UnitReview
+
+T = TypeVar("T")
 
 _PROPERTIES = ("db", "wb", "dp", "rh", "w", "h", "v")
 
@@ -37,7 +47,7 @@ def review_object(review: Review, file: str) -> dict[str, Any]:
         },
         "counts": review.counts(),
         "units": [_unit(unit) for unit in review.units.values()],
-        "plants": [],
+        "plants": [_plant(plant) for plant in review.plants],
         "findings": [_finding(one) for one in review.findings],
         "totals": {
             "tons": totals.tons,
@@ -54,6 +64,7 @@ def _unit(reviewed: UnitReview) -> dict[str, Any]:
     for key, at in (
         ("governing", known(lambda: case.governing)),
         ("rated", known(lambda: case.rated)),
+        ("heat_governing", known(lambda: case.heat_governing)),
     ):
         if at is not None:
             made[key] = at.name
@@ -61,21 +72,41 @@ def _unit(reviewed: UnitReview) -> dict[str, Any]:
         at.name: _cooling(at) if isinstance(at, Cooling) else _heating(at)
         for at in case.evaluations
     }
+    made |= _figures(case, UNIT_FIGURES)
     made["findings"] = [_finding(one) for one in reviewed.findings]
     return made
 
 
-def _cooling(at: Cooling) -> dict[str, Any]:
-    figures = {
-        figure.key: value
-        for figure in COOLING_FIGURES
-        if (value := known(figure.get, at)) is not None
+def _plant(reviewed: PlantReview) -> dict[str, Any]:
+    case = reviewed.case
+    made: dict[str, Any] = {"name": case.name}
+    load, flow = known(lambda: case.load), known(lambda: case.flow)
+    between = {
+        "condition": known(lambda: case.governing),
+        "load": load,
+        "flow": flow,
+        "load_margin": _margin(case.plant.capacity, load),
+        "flow_margin": _margin(case.plant.flow, flow),
     }
-    return {"season": "cooling", **_states(at, COOLING_STATES), **figures}
+    made |= {key: value for key, value in between.items() if value is not None}
+    made["findings"] = [_finding(one) for one in reviewed.findings]
+    return made
+
+
+def _margin(scheduled: float | None, required: float | None) -> float | None:
+    return None if scheduled is None or not required else margin(scheduled, required)
+
+
+def _cooling(at: Cooling) -> dict[str, Any]:
+    return {"season": "cooling", **_states(at, COOLING_STATES), **_figures(at, COOLING_FIGURES)}
 
 
 def _heating(at: Heating) -> dict[str, Any]:
-    return {"season": "heating", **_states(at, HEATING_STATES)}
+    return {"season": "heating", **_states(at, HEATING_STATES), **_figures(at, HEATING_FIGURES)}
+
+
+def _figures(of: T, figures: tuple[Figure[T], ...]) -> dict[str, float]:
+    return {figure.key: value for figure in figures if (value := known(figure.get, of)) is not None}
 
 
 def _states(at: object, names: tuple[tuple[str, str], ...]) -> dict[str, Any]:

@@ -57,6 +57,11 @@ class Entries:
 
 
 @dataclass(frozen=True, slots=True)
+class Calculations(Entries):
+    """A list of results, each with the formulas behind it, every one a line by itself."""
+
+
+@dataclass(frozen=True, slots=True)
 class Table:
     """A table.
 

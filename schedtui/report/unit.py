@@ -2,13 +2,20 @@
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING
+from functools import partial
+from typing import TYPE_CHECKING, TypeVar
 
 from schedtui.errors import Absent, AirError
 from schedtui.report.findings import finding_entries
 from schedtui.report.page import Block, Heading, Page, Paragraph, Table
+from schedtui.review.cooling import Cooling
 from schedtui.review.figure import known
-from schedtui.review.quantities import COOLING_FIGURES, COOLING_STATES
+from schedtui.review.quantities import (
+    COOLING_FIGURES,
+    COOLING_STATES,
+    HEATING_FIGURES,
+    HEATING_STATES,
+)
 from schedtui.units import (
     ENTHALPY,
     HUMIDITY_RATIO,
@@ -20,11 +27,14 @@ from schedtui.units import (
 )
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator
+    from collections.abc import Callable, Iterator
 
     from schedtui.air.state import State
-    from schedtui.review.cooling import Cooling
+    from schedtui.review.airpath import AirPath
+    from schedtui.review.quantities import Figure
     from schedtui.review.reviewed import UnitReview
+
+A = TypeVar("A", bound="AirPath")
 
 _PROPERTIES: tuple[tuple[str, str, Quantity], ...] = (
     ("db", "DB", TEMPERATURE),
@@ -35,16 +45,6 @@ _PROPERTIES: tuple[tuple[str, str, Quantity], ...] = (
     ("h", "h", ENTHALPY),
     ("v", "v", SPECIFIC_VOLUME),
 )
-_STATE_LABELS = {
-    "outdoor": "outdoor",
-    "recovered": "recovered",
-    "return": "return",
-    "mixed": "mixed",
-    "coil_entering": "coil entering",
-    "coil_leaving": "coil leaving",
-    "supply": "supply",
-    "room": "room",
-}
 
 
 def unit_findings_page(reviewed: UnitReview) -> Page:
@@ -63,42 +63,52 @@ def unit_findings_page(reviewed: UnitReview) -> Page:
 def unit_air_page(reviewed: UnitReview) -> Page:
     """Return the states of a unit's air and its figures, condition by condition."""
     case = reviewed.case
-    governing = known(lambda: case.governing)
+    governing = (known(lambda: case.governing), known(lambda: case.heat_governing))
     blocks: list[Block] = []
-    if not case.cooling:
-        blocks.append(Paragraph(f"{reviewed.label}: no cooling condition applies."))
-    for at in case.cooling:
-        governs = ", governing" if at is governing else ""
+    if not case.evaluations:
+        blocks.append(Paragraph(f"{reviewed.label}: no condition applies."))
+    for at in case.evaluations:
+        governs = ", governing" if at in governing else ""
         blocks.append(Heading(f"{reviewed.label} at {at.name}{governs}", 2))
-        blocks += _at_condition(at)
+        if isinstance(at, Cooling):
+            blocks += _at_condition(at, COOLING_STATES, COOLING_FIGURES)
+            blocks += _without_load(partial(getattr, at, "coil"))
+        else:
+            blocks += _at_condition(at, HEATING_STATES, HEATING_FIGURES)
     return Page(tuple(blocks))
 
 
-def _at_condition(at: Cooling) -> Iterator[Block]:
+def _at_condition(
+    at: A, states: tuple[tuple[str, str], ...], figures: tuple[Figure[A], ...]
+) -> Iterator[Block]:
     system = at.site.system
-    rows = tuple(_state_rows(at))
+    rows = tuple(_state_rows(at, states))
     if rows:
         headings = tuple(f"{short} {quantity.unit(system)}" for _, short, quantity in _PROPERTIES)
         yield Table(("Air", *headings), rows, frozenset(range(1, len(headings) + 1)))
-    figures = tuple(
+    found = tuple(
         (figure.label, format_number(value, figure.quantity.digits(system)),
          figure.quantity.unit(system), figure.of)
-        for figure in COOLING_FIGURES
+        for figure in figures
         if (value := known(figure.get, at)) is not None
     )  # fmt: skip
-    if figures:
-        yield Table(("Figure", "Value", "Unit", "From"), figures, frozenset({1}))
+    if found:
+        yield Table(("Figure", "Value", "Unit", "From"), found, frozenset({1}))
+
+
+def _without_load(ask: Callable[[], object]) -> Iterator[Block]:
+    """Say why there is no coil load, where there is none."""
     try:
-        at.coil  # noqa: B018  asked for its absence
+        ask()
     except Absent as absent:
         yield Paragraph(f"No coil load: {absent}.")
 
 
-def _state_rows(at: Cooling) -> Iterator[tuple[str, ...]]:
-    for name, attribute in COOLING_STATES:
+def _state_rows(at: AirPath, states: tuple[tuple[str, str], ...]) -> Iterator[tuple[str, ...]]:
+    for name, attribute in states:
         state = known(getattr, at, attribute)
         if state is not None:
-            yield (_STATE_LABELS[name], *_property_texts(state))
+            yield (name.replace("_", " "), *_property_texts(state))
 
 
 def _property_texts(state: State) -> Iterator[str]:

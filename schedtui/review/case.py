@@ -6,7 +6,7 @@ from dataclasses import dataclass
 from typing import TYPE_CHECKING, TypeVar
 
 from schedtui.air.flow import volume_flow
-from schedtui.errors import Absent, AirError
+from schedtui.errors import Absent, StateError
 from schedtui.review.airpath import outdoor_air
 from schedtui.review.cooling import Cooling
 from schedtui.review.face import velocity
@@ -19,7 +19,7 @@ from schedtui.schedule.catalogue.unit import Unit
 from schedtui.schedule.typed import Typed
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterator, Mapping, Sequence
+    from collections.abc import Callable, Mapping, Sequence
 
     from schedtui.air.state import State
     from schedtui.review.site import Site
@@ -86,7 +86,7 @@ class UnitCase:
     @figure
     def governing(self) -> Cooling:
         """The cooling condition with the greatest coil total, the first of equals."""
-        return self._greatest(self.cooling, lambda at: at.coil.total)
+        return self._greatest("cooling", self.cooling, lambda at: at.coil.total)
 
     @figure
     def rated(self) -> Cooling:
@@ -114,7 +114,7 @@ class UnitCase:
             for at in self.cooling
             if at.condition.sensible_load == at.condition.latent_load == _FULL_LOAD
         ]
-        return self._greatest(full or self.cooling, lambda at: -self._distance(at))
+        return self._greatest("cooling", full or self.cooling, lambda at: -self._distance(at))
 
     @property
     def _states_entering(self) -> bool:
@@ -141,7 +141,7 @@ class UnitCase:
     @figure
     def heat_governing(self) -> Heating:
         """The heating condition with the greatest load of the heating coil, the first of equals."""
-        return self._greatest(self.heating, lambda at: at.heat_load)
+        return self._greatest("heating", self.heating, lambda at: at.heat_load)
 
     @figure
     def heat_nearest(self) -> Heating:
@@ -163,14 +163,14 @@ class UnitCase:
         scheduled = self.unit.value_of(field)
         if scheduled is None:
             return self.heat_governing
-        return self._greatest(self.heating, lambda at: -abs(entering(at) - scheduled))
+        return self._greatest("heating", self.heating, lambda at: -abs(entering(at) - scheduled))
 
     @figure
     def row_heat(self) -> RowHeat:
         """The heating coil as the row's own numbers have it."""
         return RowHeat(self.unit, self.heat_nearest.condition, self.site)
 
-    def _greatest(self, conditions: Sequence[C], measure: Callable[[C], float]) -> C:
+    def _greatest(self, season: str, conditions: Sequence[C], measure: Callable[[C], float]) -> C:
         """Return the condition of the greatest measure, the first of equals.
 
         Raises:
@@ -179,7 +179,7 @@ class UnitCase:
         measured = [(known(measure, at), at) for at in conditions]
         found = [(value, at) for value, at in measured if value is not None]
         if not found:
-            raise why_none(conditions, measure)
+            raise _why_none(season, conditions, measure)
         return max(found, key=lambda pair: pair[0])[1]
 
     def _distance(self, at: Cooling) -> float:
@@ -212,7 +212,7 @@ class ConditionCase:
 
         Raises:
             Absent: not stated.
-            AirError: no such air.
+            StateError: no such air.
         """
         return outdoor_air(self.condition, self.site)
 
@@ -238,35 +238,13 @@ class ScheduleCase:
         return found
 
 
-def why_none(conditions: Sequence[C], ask: Callable[[C], object]) -> Absent:
-    """Return why none of some conditions has a figure: the first one's reason."""
+def _why_none(season: str, conditions: Sequence[C], ask: Callable[[C], object]) -> Absent:
+    """Return why none of a season's conditions has a figure: the first one's reason."""
     for at in conditions:
         try:
             ask(at)
         except Absent as absent:
             return absent
-        except AirError as error:
+        except StateError as error:
             return Absent(why=str(error))
-    return Absent(why="no such condition applies")
-
-
-def labels(units: tuple[Unit, ...]) -> Iterator[tuple[int, str]]:
-    """Name each unit as messages do: by its tag, "AHU-1 (2nd)" when used again, "unit 3" without.
-
-    Yields:
-        Row id and label.
-    """
-    seen: dict[str, int] = {}
-    for place, unit in enumerate(units, start=1):
-        if unit.tag is None:
-            yield unit.row_id, f"unit {place}"
-            continue
-        times = seen[unit.tag] = seen.get(unit.tag, 0) + 1
-        yield unit.row_id, unit.tag if times == 1 else f"{unit.tag} ({_ordinal(times)})"
-
-
-def _ordinal(number: int) -> str:
-    """Return 2nd, 3rd, 4th, …, 11th, …, 22nd."""
-    tens, ones = divmod(number, 10)
-    ending = {1: "st", 2: "nd", 3: "rd"}.get(ones, "th")
-    return f"{number}{'th' if tens % 10 == 1 else ending}"
+    return Absent(why=f"no {season} condition applies")

@@ -12,8 +12,13 @@ if TYPE_CHECKING:
     from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
     from schedtui.review.cooling import Cooling
     from schedtui.review.heating import Heating
+    from schedtui.review.plants import PlantCase
 
 Faults = Iterable[Fault]
+
+# Ranks of findings: a slip of the unit or the air explains a contradiction of two numbers, that
+# one that the air entering a coil is another, and all of them that a total is short.
+SLIP, IMPOSSIBLE, CONTRADICTION, DENSITY, OTHER_AIR, CAPACITY, CONSEQUENCE = range(1, 8)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -29,7 +34,10 @@ class Check:
         source: the standard or handbook behind it, or "common practice".
         judges: the scheduled keys that it judges; where one of them is typed and the check cannot
             be made, that is a finding.
-        explains: whether its fault tells why others stand, so that it is named before them.
+        rank: place in which a unit's findings are read, the lower the earlier: what explains others
+            comes before what follows from it.
+        derived: givens that in this comparison were derived and printed, as the leaving dry bulb
+            is from the room's load: their digits count here too.
         reads_digits: whether the digits that numbers are printed with can explain its faults.
         unit: finds faults in a unit.
         cooling: finds faults in a unit at each of its cooling conditions.
@@ -37,6 +45,7 @@ class Check:
         governing: finds faults in a unit at its governing cooling condition.
         heating: finds faults in a unit at each of its heating conditions.
         condition: finds faults in a condition.
+        plant: finds faults in a plant.
         schedule: finds faults in the schedule as a whole.
     """
 
@@ -44,7 +53,8 @@ class Check:
     sentence: str
     source: str
     judges: tuple[str, ...] = ()
-    explains: bool = False
+    rank: int = CONSEQUENCE
+    derived: tuple[str, ...] = ()
     reads_digits: bool = True
     unit: Callable[[UnitCase], Faults] | None = None
     cooling: Callable[[Cooling], Faults] | None = None
@@ -52,4 +62,5 @@ class Check:
     governing: Callable[[Cooling], Faults] | None = None
     heating: Callable[[Heating], Faults] | None = None
     condition: Callable[[ConditionCase], Faults] | None = None
+    plant: Callable[[PlantCase], Faults] | None = None
     schedule: Callable[[ScheduleCase], Faults] | None = None

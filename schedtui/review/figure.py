@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING, Any, Generic, ParamSpec, Self, TypeVar, overload
 
-from schedtui.errors import Absent, AirError
+from schedtui.errors import Absent, StateError
 
 if TYPE_CHECKING:
     from collections.abc import Callable
@@ -60,7 +60,7 @@ class figure(Generic[T]):  # noqa: N801  reads as a decorator beside `property`
             return self._method(evaluation)
         except Absent as absent:
             return absent
-        except AirError as error:
+        except StateError as error:
             return Absent(why=str(error))
 
 
@@ -68,5 +68,5 @@ def known(ask: Callable[P, T], *args: P.args, **kwargs: P.kwargs) -> T | None:
     """Return what `ask` returns, None where it is absent or no air can have it."""
     try:
         return ask(*args, **kwargs)
-    except (Absent, AirError):
+    except (Absent, StateError):
         return None

@@ -26,6 +26,8 @@ class Severity(IntEnum):
         return self.name.lower()
 
 
+_LAST = 99  # rank of what is not sure enough to explain anything
+
 WORST_FIRST = tuple(sorted(Severity, reverse=True))
 
 
@@ -96,7 +98,7 @@ class Subject:
         if self.table in ("unit", "file"):
             return key
         name = self.label.removeprefix(f"{self.table} ")
-        return f"{self.table}.{key}" if name == self.table else f"{self.table}[{name}].{key}"
+        return f"{self.table}.{key}" if self.label == self.table else f"{self.table}[{name}].{key}"
 
 
 @dataclass(frozen=True, slots=True)
@@ -116,7 +118,7 @@ class Finding:
         unit: unit of both.
         accepted: whether a reviewer has accepted it.
         rounding: whether the printed digits alone can explain it.
-        explains: whether it tells why others stand.
+        rank: place in which it is read among a unit's, the lower the earlier.
     """
 
     check: str
@@ -131,7 +133,7 @@ class Finding:
     unit: str = ""
     accepted: bool = False
     rounding: bool = False
-    explains: bool = False
+    rank: int = 0
 
     @property
     def paths(self) -> tuple[str, ...]:
@@ -144,9 +146,9 @@ def in_order(findings: Iterable[Finding]) -> tuple[Finding, ...]:
     return tuple(sorted(findings, key=_place))
 
 
-def _place(finding: Finding) -> tuple[bool, int]:
-    explains = finding.explains and not finding.rounding and finding.severity > Severity.MISSING
-    return not explains, -finding.severity
+def _place(finding: Finding) -> tuple[int, int]:
+    sure = finding.severity > Severity.MISSING and not finding.rounding
+    return finding.rank if sure else _LAST, -finding.severity
 
 
 def margin(scheduled: float, required: float) -> float | None:

@@ -10,7 +10,7 @@ from __future__ import annotations
 from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING, TypeVar
 
-from schedtui.errors import Absent, AirError
+from schedtui.errors import Absent, StateError
 from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
 from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Finding, Severity, Subject, in_order, margin
@@ -24,6 +24,7 @@ if TYPE_CHECKING:
 
     from schedtui.review.airpath import AirPath
     from schedtui.review.check import Check, Faults
+    from schedtui.review.plants import PlantCase
     from schedtui.schedule.catalogue.table import Table
     from schedtui.schedule.catalogue.unit import Unit
 
@@ -62,7 +63,7 @@ def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
             except Absent as absent:
                 absences.append(absent)
                 continue
-            except AirError as error:
+            except StateError as error:
                 absences.append(Absent(why=str(error)))
                 continue
             for fault in faults:
@@ -83,6 +84,26 @@ def judge_condition(case: ConditionCase) -> tuple[Finding, ...]:
         if check.condition is not None
         for fault in check.condition(case)
     )
+
+
+def judge_plant(case: PlantCase) -> tuple[Finding, ...]:
+    """Return the findings of a plant, worst first."""
+    row = case.plant
+    subject = Subject("plant", row.row_id, f"plant {row.name}")
+    condition = known(lambda: case.governing)
+    found: list[Finding] = []
+    for name, check in registered().items():
+        if check.plant is None:
+            continue
+        try:
+            faults = list(check.plant(case))
+        except Absent as absent:
+            if any(map(row.stated, check.judges)):
+                message, keys = lack([absent], row)
+                found.append(Finding(name, Severity.MISSING, subject, keys, message))
+            continue
+        found += [_finding(name, check, subject, fault, row, condition) for fault in faults]
+    return in_order(found)
 
 
 def judge_schedule(case: ScheduleCase, labels: dict[int, str]) -> tuple[Finding, ...]:
@@ -158,7 +179,9 @@ def _judged(
     limits = case.site.limits
     explained = None
     if check.reads_digits:
-        explained = explained_by_digits(case.unit, fault, asking.of, limits.rounding_cap)
+        explained = explained_by_digits(
+            case.unit, fault, asking.of, limits.rounding_cap, check.derived
+        )
     if explained is None:
         yield finding
         return
@@ -204,5 +227,5 @@ def _finding(
         required=fault.required,
         margin=between,
         unit=fault.quantity.unit(row.system) if fault.quantity else "",
-        explains=check.explains,
+        rank=check.rank,
     )

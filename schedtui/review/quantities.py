@@ -6,10 +6,11 @@ An entry says what a figure is called, measures and is computed from, and how to
 from __future__ import annotations
 
 from dataclasses import dataclass
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, Generic, TypeVar
 
 from schedtui.errors import Absent
 from schedtui.review.finding import margin
+from schedtui.review.fluid_side import COOLING, HEATING
 from schedtui.schedule.catalogue.field import Group
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import (
@@ -21,6 +22,7 @@ from schedtui.units import (
     REFRIGERATION,
     TEMPERATURE,
     TEMPERATURE_DIFFERENCE,
+    VELOCITY,
     Quantity,
 )
 
@@ -29,11 +31,15 @@ if TYPE_CHECKING:
 
     from schedtui.review.case import UnitCase
     from schedtui.review.cooling import Cooling
+    from schedtui.review.heating import Heating
+
+
+T_contra = TypeVar("T_contra", contravariant=True)
 
 
 @dataclass(frozen=True, slots=True)
-class Figure:
-    """A computed number of a unit at one cooling condition.
+class Figure(Generic[T_contra]):
+    """A computed number: of a unit, or of a unit at one condition.
 
     Args:
         key: its name in the JSON.
@@ -47,7 +53,7 @@ class Figure:
     label: str
     quantity: Quantity
     of: str
-    get: Callable[[Cooling], float]
+    get: Callable[[T_contra], float]
 
 
 @dataclass(frozen=True, slots=True)
@@ -75,7 +81,7 @@ class ComputedColumn:
     get: Callable[[UnitCase], float]
 
 
-COOLING_FIGURES: tuple[Figure, ...] = (
+COOLING_FIGURES: tuple[Figure[Cooling], ...] = (
     Figure("supply_mass", "Supply mass flow", AIR_MASS_FLOW, "supply airflow and its basis",
            lambda at: at.supply_mass),
     Figure("outdoor_mass", "Outdoor mass flow", AIR_MASS_FLOW, "outdoor airflow and its basis",
@@ -112,6 +118,35 @@ COOLING_FIGURES: tuple[Figure, ...] = (
            lambda at: at.reheat_load),
 )  # fmt: skip
 
+HEATING_FIGURES: tuple[Figure[Heating], ...] = (
+    Figure("supply_mass", "Supply mass flow", AIR_MASS_FLOW, "heating airflow and its basis",
+           lambda at: at.supply_mass),
+    Figure("outdoor_mass", "Outdoor mass flow", AIR_MASS_FLOW, "outdoor airflow and its basis",
+           lambda at: at.outdoor_mass),
+    Figure("outdoor_fraction", "Outdoor share", RATIO, "outdoor and supply mass flow",
+           lambda at: at.outdoor_fraction),
+    Figure("preheat_load", "Preheat load", LOAD, "mass flow and the preheat's dry bulbs",
+           lambda at: at.preheat_load),
+    Figure("heat_load", "Heating load", LOAD, "mass flow and the heating coil's dry bulbs",
+           lambda at: at.heat_load),
+    Figure("humidifier_load", "Moisture to add", MOISTURE_FLOW,
+           "outdoor mass flow and the room's humidity ratio", lambda at: at.humidifier_load),
+    Figure("room_heat_met", "Room heat met", LOAD, "supply and room air",
+           lambda at: at.room_heat_met),
+)  # fmt: skip
+
+UNIT_FIGURES: tuple[Figure[UnitCase], ...] = (
+    Figure("cool_water_capacity", "Cooling water carries", LOAD,
+           "flow and temperatures of the cooling fluid",
+           lambda case: COOLING.carried(case.unit, case.site.system)),
+    Figure("heat_water_capacity", "Heating water carries", LOAD,
+           "flow and temperatures of the heating fluid",
+           lambda case: HEATING.carried(case.unit, case.site.system)),
+    Figure("face_velocity", "Face velocity", VELOCITY,
+           "the actual volume leaving the coil, and the face area",
+           lambda case: case.face_velocity),
+)  # fmt: skip
+
 # The states of the air path by their names in the JSON, in the order that the air takes.
 COOLING_STATES: tuple[tuple[str, str], ...] = (
     ("outdoor", "outdoor"),
@@ -123,7 +158,15 @@ COOLING_STATES: tuple[tuple[str, str], ...] = (
     ("supply", "supply"),
     ("room", "room"),
 )
-HEATING_STATES: tuple[tuple[str, str], ...] = (("outdoor", "outdoor"),)
+HEATING_STATES: tuple[tuple[str, str], ...] = (
+    ("outdoor", "outdoor"),
+    ("recovered", "recovered"),
+    ("return", "room"),
+    ("mixed", "mixed"),
+    ("preheat_leaving", "preheat_leaving"),
+    ("heat_leaving", "heat_leaving"),
+    ("room", "room"),
+)
 
 
 def _total_margin(case: UnitCase) -> float:
@@ -132,6 +175,10 @@ def _total_margin(case: UnitCase) -> float:
 
 def _sensible_margin(case: UnitCase) -> float:
     return _margin(case.unit.need(Unit.cool_sensible), case.rated.required_sensible)
+
+
+def _heat_margin(case: UnitCase) -> float:
+    return _margin(case.unit.need(Unit.heat_total), case.heat_governing.heat_load)
 
 
 def _margin(scheduled: float, required: float) -> float:
@@ -168,6 +215,21 @@ COLUMNS: tuple[ComputedColumn, ...] = (
     ComputedColumn("tons_required", "Cooling tons required", "NEEDS", Group.COOLING, "cool_tons",
                    REFRIGERATION, "the coil total at the governing condition",
                    lambda case: case.governing.coil.tons),
+    ComputedColumn("face_velocity", "Face velocity", "VELOCITY", Group.COIL, "cool_face_area",
+                   VELOCITY, "the actual volume leaving the coil, and the face area",
+                   lambda case: case.face_velocity),
+    ComputedColumn("cool_water_capacity", "Cooling water carries", "CARRIES",
+                   Group.COOLING_FLUID, "cool_flow", LOAD,
+                   "flow and temperatures of the cooling fluid",
+                   lambda case: COOLING.carried(case.unit, case.site.system)),
+    ComputedColumn("heat_required", "Heating required", "NEEDS", Group.HEATING, "heat_total", LOAD,
+                   "air around the heating coil at its governing condition",
+                   lambda case: case.heat_governing.heat_load),
+    ComputedColumn("heat_margin", "Heating margin", "MARGIN", Group.HEATING, "heat_total", PERCENT,
+                   "scheduled heating over the one required", _heat_margin),
+    ComputedColumn("preheat_required", "Preheat required", "NEEDS", Group.PREHEAT,
+                   "preheat_total", LOAD, "air around the preheat at the governing condition",
+                   lambda case: case.heat_governing.preheat_load),
     ComputedColumn("shr", "Sensible heat ratio", "SHR", Group.COOLING, "cool_tons", RATIO,
                    "coil sensible over total at the governing condition",
                    lambda case: case.governing.shr),

@@ -7,13 +7,14 @@ new, anything else makes every unit new.
 from __future__ import annotations
 
 from collections import Counter
-from dataclasses import dataclass
+from dataclasses import dataclass, field, replace
 from typing import TYPE_CHECKING
 
-from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase, labels
+from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
 from schedtui.review.figure import known
 from schedtui.review.finding import Finding, Severity, in_order
-from schedtui.review.judge import judge_condition, judge_schedule, judge_unit
+from schedtui.review.judge import judge_condition, judge_plant, judge_schedule, judge_unit
+from schedtui.review.plants import PlantCase
 from schedtui.review.site import Site, site_of
 
 if TYPE_CHECKING:
@@ -33,36 +34,48 @@ class UnitReview:
     Args:
         label: how messages name it.
         case: the unit with its evaluations.
-        own: findings of the unit by itself, worst first.
+        own: findings of the unit by itself, in the order they are read.
         shared: findings that only the whole schedule shows, a duplicate tag for one.
+        findings: both, in the order they are read.
+        worst: the worst severity among findings that nobody has accepted.
+        status: the unit's state in one word.
     """
 
     label: str
     case: UnitCase
     own: tuple[Finding, ...]
     shared: tuple[Finding, ...] = ()
+    findings: tuple[Finding, ...] = field(init=False)
+    worst: Severity | None = field(init=False)
+    status: str = field(init=False)
+
+    def __post_init__(self) -> None:
+        """Settle what follows, once: every key on the screen asks for it."""
+        findings = in_order((*self.own, *self.shared)) if self.shared else self.own
+        worst = max((one.severity for one in findings if not one.accepted), default=None)
+        status = CLEAR if worst is None else worst.word
+        if any(self.unit.bad_keys()):
+            status = UNREADABLE
+        for name, value in (("findings", findings), ("worst", worst), ("status", status)):
+            object.__setattr__(self, name, value)
 
     @property
     def unit(self) -> Unit:
         """The unit as scheduled."""
         return self.case.unit
 
-    @property
-    def findings(self) -> tuple[Finding, ...]:
-        """All findings of the unit, in the order they are read."""
-        return in_order((*self.own, *self.shared)) if self.shared else self.own
 
-    @property
-    def worst(self) -> Severity | None:
-        """The worst severity among findings that nobody has accepted."""
-        return max((one.severity for one in self.findings if not one.accepted), default=None)
+@dataclass(frozen=True, slots=True)
+class PlantReview:
+    """One plant, reviewed.
 
-    @property
-    def status(self) -> str:
-        """The unit's state in one word."""
-        if any(self.unit.bad_keys()):
-            return UNREADABLE
-        return CLEAR if self.worst is None else self.worst.word
+    Args:
+        case: the plant with what it feeds.
+        findings: findings of the plant, worst first.
+    """
+
+    case: PlantCase
+    findings: tuple[Finding, ...]
 
 
 @dataclass(frozen=True, slots=True)
@@ -88,12 +101,14 @@ class Review:
         schedule: what was reviewed.
         site: where its units stand.
         units: the units' reviews by row id, in file order.
+        plants: the plants' reviews, in file order.
         findings: those that belong to no unit and no plant, worst first.
     """
 
     schedule: Schedule
     site: Site
     units: Mapping[int, UnitReview]
+    plants: tuple[PlantReview, ...]
     findings: tuple[Finding, ...]
 
     @property
@@ -101,6 +116,7 @@ class Review:
         """Every finding there is."""
         return (
             *(one for unit in self.units.values() for one in unit.findings),
+            *(one for plant in self.plants for one in plant.findings),
             *self.findings,
         )
 
@@ -115,7 +131,7 @@ class Review:
             "missing": by_severity[Severity.MISSING],
             "clear": sum(unit.status == CLEAR for unit in self.units.values()),
             "accepted": sum(one.accepted for one in found),
-            "rounding": sum(one.rounding and not one.accepted for one in found),
+            "rounding": sum(_is_rounding_caution(one) for one in found),
         }
 
     def totals(self) -> Totals:
@@ -140,7 +156,7 @@ def review(schedule: Schedule, previous: Review | None = None) -> Review:
     """
     site = site_of(schedule)
     kept = previous.units if previous and _same_ground(previous, schedule, site) else {}
-    names = dict(labels(schedule.units))
+    names = schedule.labels()
     own = {
         unit.row_id: _review_unit(unit, schedule, site, names[unit.row_id], kept)
         for unit in schedule.units
@@ -149,12 +165,25 @@ def review(schedule: Schedule, previous: Review | None = None) -> Review:
     for finding in whole:
         if finding.subject.table == "unit":
             row_id = finding.subject.row_id
-            shared = (*own[row_id].shared, finding)
-            own[row_id] = UnitReview(own[row_id].label, own[row_id].case, own[row_id].own, shared)
+            own[row_id] = replace(own[row_id], shared=(*own[row_id].shared, finding))
     rest = [one for one in whole if one.subject.table != "unit"]
     for condition in schedule.conditions:
         rest += judge_condition(ConditionCase(condition, site))
-    return Review(schedule, site, own, in_order(rest))
+    return Review(schedule, site, own, review_plants(schedule, site, own), in_order(rest))
+
+
+def review_plants(
+    schedule: Schedule, site: Site, units: Mapping[int, UnitReview]
+) -> tuple[PlantReview, ...]:
+    """Review every plant over the units' evaluations."""
+    cases = [(one.label, one.case) for one in units.values()]
+    plants = [PlantCase(plant, schedule, site, cases) for plant in schedule.plants]
+    return tuple(PlantReview(case, judge_plant(case)) for case in plants)
+
+
+def _is_rounding_caution(finding: Finding) -> bool:
+    """Tell whether a shortfall or conflict was made a caution by the printed digits."""
+    return finding.rounding and not finding.accepted and finding.severity is Severity.CAUTION
 
 
 def _required_tons(case: UnitCase) -> float:
@@ -180,6 +209,6 @@ def _review_unit(
 ) -> UnitReview:
     before = kept.get(unit.row_id)
     if before is not None and before.unit is unit and before.label == label:
-        return UnitReview(label, before.case, before.own)
+        return replace(before, shared=()) if before.shared else before
     case = UnitCase(unit, schedule, site)
     return UnitReview(label, case, judge_unit(case, label))

@@ -8,10 +8,10 @@ watching it, so that no check knows of this.
 from __future__ import annotations
 
 import math
-from collections.abc import Callable, Iterable, Mapping
+from collections.abc import Callable, Collection, Iterable, Mapping
 from dataclasses import dataclass
 
-from schedtui.errors import Absent, AirError
+from schedtui.errors import Absent, StateError
 from schedtui.review.finding import Fault
 from schedtui.schedule.catalogue.kinds import NumberKind
 from schedtui.schedule.catalogue.unit import Unit
@@ -23,6 +23,9 @@ FindIn = Callable[[Unit], Iterable[Fault]]
 # drops by a tenth: an interval across it has its best place on either side.
 _FREEZING: dict[System, float] = {"IP": 32.0, "SI": 0.0}
 _BESIDE = 1e-6
+_COIL_TEMPERATURES = ("cool_eat_db", "cool_eat_wb", "cool_lat_db", "cool_lat_wb")
+_ENOUGH = 3  # coil temperatures that must be there to tell half degrees by
+_TENTH, _HALF = 0.1, 0.5
 _HALVINGS = 14
 
 
@@ -39,31 +42,42 @@ class Explained:
     band: float
 
 
-def explained_by_digits(unit: Unit, fault: Fault, find: FindIn, cap: float) -> Explained | None:
+def explained_by_digits(
+    unit: Unit, fault: Fault, find: FindIn, cap: float, derived: Collection[str] = ()
+) -> Explained | None:
     """Return how rounding alone can explain a fault, None where the fault stands.
 
     Args:
         unit: the unit as scheduled.
         fault: the fault, found in it.
         find: the check that found it, over any reading of the unit.
-        cap: the widest band of a load [% of what is required].
+        cap: the widest band of a scheduled capacity [% of what is required].
+        derived: givens whose digits count besides those of what is always derived and printed.
     """
     if fault.scheduled is None or fault.required is None:
         return None
     reads: set[str] = set()
     if _distance(unit.traced(reads), fault, find) == 0:
         return None  # found in something else than the unit's own numbers
-    corner, best = _favourable_corner(unit, fault, find, reads)
+    printed = [key for key in reads if Unit.catalogue[key].printed or key in derived]
+    corner, best = _favourable_corner(unit, fault, find, printed)
     if not corner or _distance(unit.replaced(corner), fault, find) > 0:
         return None
     share, moved = _share_needed(unit, fault, find, corner)
-    if fault.quantity is LOAD and moved > cap / 100 * abs(fault.required):
+    if _is_capacity(unit, fault) and moved > cap / 100 * abs(fault.required):
         return None
     return Explained(best, moved / share)
 
 
+def _is_capacity(unit: Unit, fault: Fault) -> bool:
+    """Tell whether a fault is about a capacity as scheduled that air or room require."""
+    cell = unit.typed(fault.fields[0])
+    stated = cell is not None and cell.value == fault.scheduled
+    return stated and fault.quantity is LOAD and len(fault.fields) == 1
+
+
 def _favourable_corner(
-    unit: Unit, fault: Fault, find: FindIn, reads: Iterable[str]
+    unit: Unit, fault: Fault, find: FindIn, printed: Iterable[str]
 ) -> tuple[Mapping[str, float], str]:
     """Return for each printed number that matters its most favourable value; name the first.
 
@@ -72,7 +86,7 @@ def _favourable_corner(
     start = _distance(unit, fault, find)
     corner: dict[str, float] = {}
     gains: dict[str, float] = {}
-    for key in sorted(reads):
+    for key in sorted(printed):
         for value in _interval(unit, key):
             gain = start - _distance(unit.replaced({key: value}), fault, find)
             if gain > gains.get(key, 0.0):
@@ -83,9 +97,9 @@ def _favourable_corner(
 def _interval(unit: Unit, key: str) -> Iterable[float]:
     """Return the ends of what a printed number may stand for, and both sides of freezing."""
     field, cell = Unit.catalogue[key], unit.typed(key)
-    if not field.printed or cell is None or not isinstance(cell.value, float):
+    if cell is None or not isinstance(cell.value, float):
         return ()
-    size = step(cell.text)
+    size = _step(unit, key, cell.text)
     if size is None:
         return ()
     low, high = cell.value - size / 2, cell.value + size / 2
@@ -97,6 +111,21 @@ def _interval(unit: Unit, key: str) -> Iterable[float]:
     assert isinstance(kind, NumberKind)  # noqa: S101  what is printed is a number
     accepted = kind.ip if unit.system == "IP" else kind.si
     return [end for end in ends if accepted.holds(end)]
+
+
+def _step(unit: Unit, key: str, text: str) -> float | None:
+    """Return the step that a number is printed with.
+
+    Some sheets print half degrees. A row all of whose coil temperatures end in .0 or .5, and one
+    at least in .5, is read as such: by chance that is one row in several hundred.
+    """
+    size = step(text)
+    if key not in _COIL_TEMPERATURES or size != _TENTH:
+        return size
+    texts = [cell.text for one in _COIL_TEMPERATURES if (cell := unit.typed(one)) is not None]
+    endings = {text[-2:] for text in texts}
+    halves = len(texts) >= _ENOUGH and ".5" in endings and endings <= {".0", ".5"}
+    return _HALF if halves else size
 
 
 def _distance(unit: Unit, fault: Fault, find: FindIn) -> float:
@@ -114,7 +143,7 @@ def _same_fault(unit: Unit, fault: Fault, find: FindIn) -> Fault | None:
         for again in find(unit):
             if again.fields == fault.fields:
                 return again
-    except (Absent, AirError):  # not to be judged there, so nothing is explained there
+    except (Absent, StateError):  # not to be judged there, so nothing is explained there
         return Fault("", fault.fields)
     return None
 

@@ -5,7 +5,16 @@ from __future__ import annotations
 import re
 from typing import TYPE_CHECKING
 
-from schedtui.report.page import Block, Entries, Heading, Page, Paragraph, Table
+from schedtui.report.page import (
+    Block,
+    Calculations,
+    Entries,
+    Entry,
+    Heading,
+    Page,
+    Paragraph,
+    Table,
+)
 from schedtui.text_width import visible
 
 if TYPE_CHECKING:
@@ -13,6 +22,9 @@ if TYPE_CHECKING:
 
 # Whatever could act as markup in running text: a text from a file is data.
 _ACTING = re.compile(r"([\\`*_{}\[\]<>#|~!&])")
+
+# At the start of a paragraph, what would make a list or underline a heading.
+_LEADING = re.compile(r"^(\s*)([-+=]|\d+[.)])")
 
 
 def render(page: Page) -> str:
@@ -25,17 +37,32 @@ def _block(block: Block) -> Iterable[str]:
         case Heading(text, level):
             return [f"{'#' * level} {plain(text)}"]
         case Paragraph(text):
-            return [plain(text)]
+            return [_LEADING.sub(_escaped, plain(text))]
+        case Calculations(entries):
+            return (line for one in entries for line in _calculation(one))
         case Entries(entries):
             return (line for one in entries for line in _entry(one.label, one.head, one.lines))
         case Table():
             return _table(block)
 
 
+def _escaped(start: re.Match[str]) -> str:
+    """Return the start of a paragraph with its last character made harmless."""
+    return f"{start[1]}{start[2][:-1]}\\{start[2][-1]}"
+
+
 def _entry(label: str, head: str, lines: tuple[str, ...]) -> Iterator[str]:
     yield f"- **{plain(label)}** {plain(head)}"
     for line in lines:
         yield f"  {plain(line)}"
+
+
+def _calculation(entry: Entry) -> Iterator[str]:
+    """Set a result with its formulas as they stand, each on a line of its own."""
+    lines = [f"- **{plain(entry.label)}** = {plain(entry.head)}"]
+    lines += [f"  `{visible(text)}`" for text in entry.lines]
+    yield from (f"{line}\\" for line in lines[:-1])
+    yield lines[-1]
 
 
 def _table(table: Table) -> Iterator[str]:

@@ -5,7 +5,16 @@ from __future__ import annotations
 import textwrap
 from typing import TYPE_CHECKING
 
-from schedtui.report.page import Block, Entries, Entry, Heading, Page, Paragraph, Table
+from schedtui.report.page import (
+    Block,
+    Calculations,
+    Entries,
+    Entry,
+    Heading,
+    Page,
+    Paragraph,
+    Table,
+)
 from schedtui.text_width import cut, fill, visible, width_of
 
 if TYPE_CHECKING:
@@ -13,6 +22,8 @@ if TYPE_CHECKING:
 
 WIDTH = 80
 _LABEL_WIDTH = 16
+_SYMBOL_WIDTH = 8
+_KEPT_TOGETHER = "\N{NO-BREAK SPACE}·\N{NO-BREAK SPACE}"  # a product stays on its line
 _LONGEST_CELL = 24
 _GAP = "  "
 
@@ -30,6 +41,8 @@ def block_lines(block: Block, width: int) -> Iterable[str]:
             return _heading(visible(text), level, width)
         case Paragraph(text):
             return _wrapped(visible(text), width)
+        case Calculations(entries):
+            return (line for one in entries for line in _calculation(one, width))
         case Entries(entries):
             return (line for one in entries for line in _entry(one, width))
         case Table():
@@ -53,6 +66,17 @@ def _entry(entry: Entry, width: int) -> Iterator[str]:
         yield " " * _LABEL_WIDTH + first
     for line in rest + [part for text in entry.lines for part in _wrapped(visible(text), room)]:
         yield " " * _LABEL_WIDTH + line
+
+
+def _calculation(entry: Entry, width: int) -> Iterator[str]:
+    """Give the result the line's head, and break its formulas between their terms."""
+    shown = f"{fill(visible(entry.label), _SYMBOL_WIDTH)}= {visible(entry.head)}"
+    first, hanging = " " * _SYMBOL_WIDTH, " " * (_SYMBOL_WIDTH + 2)
+    yield from textwrap.wrap(shown, width, subsequent_indent=hanging, break_on_hyphens=False)
+    for text in entry.lines:
+        joined = visible(text).replace(" · ", _KEPT_TOGETHER)
+        for line in textwrap.wrap(joined, width, initial_indent=first, subsequent_indent=hanging):
+            yield line.replace(_KEPT_TOGETHER, " · ")
 
 
 def _table(table: Table) -> Iterator[str]:

@@ -9,7 +9,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import AIRFLOW
@@ -60,7 +60,7 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Return and outdoor air make up the supply air.",
     source="conservation of mass; the limit is common practice",
-    explains=True,
+    rank=CONTRADICTION,
     judges=("return_airflow",),
     unit=find,
 )

@@ -12,14 +12,16 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
-from schedtui.review.finding import Fault, Severity
+from schedtui.review.check import CAPACITY, Check, Faults
+from schedtui.review.finding import Fault, Measure, Severity
 from schedtui.review.shortfall import is_short
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import LOAD
 
 if TYPE_CHECKING:
     from schedtui.review.cooling import Cooling
+
+_MOST_OF = 0.6  # so much of the fan's heat lacking, the rest being margin, looks like a net capacity
 
 
 def find(at: Cooling) -> Faults:
@@ -28,19 +30,24 @@ def find(at: Cooling) -> Faults:
     limits = at.site.limits
     allowed = required - at.coil.condensate_heat
     if is_short(scheduled, allowed, limits.total_margin, limits.agreement):
-        yield Fault(
-            "scheduled total {scheduled}, the coil needs {required}",
-            ("cool_total",),
-            scheduled,
-            required,
-            LOAD,
-        )
+        says = "scheduled total {scheduled}, the coil needs {required}"
+        if _is_net(at, scheduled, allowed):
+            says += "; with the fan's heat of {fan} it would do: is it a net capacity?"
+        fan = Measure(at.fan_heat, LOAD)
+        yield Fault(says, ("cool_total",), scheduled, required, LOAD, {"fan": fan})
+
+
+def _is_net(at: Cooling, scheduled: float, required: float) -> bool:
+    """Tell whether it is about the supply fan's heat that a gross capacity lacks."""
+    lacking, fan = required - scheduled, at.fan_heat
+    return at.unit.cool_basis == "gross" and fan * _MOST_OF <= lacking <= fan
 
 
 CHECK = Check(
     severity=Severity.SHORT,
     sentence="The scheduled cooling total carries the coil's load at every cooling condition.",
     source="ASHRAE Handbook—Fundamentals, ch. 1 and ch. 18",
+    rank=CAPACITY,
     judges=("cool_total",),
     cooling=find,
 )

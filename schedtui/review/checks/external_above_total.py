@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import AIR_PRESSURE
@@ -37,7 +37,7 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="The external pressure is not above the fan's total pressure.",
     source="by definition: the external is a part of the total",
-    explains=True,
+    rank=CONTRADICTION,
     judges=("fan_external_pressure",),
     unit=find,
 )

@@ -9,6 +9,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from schedtui.review.check import Check, Faults
+from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import VELOCITY
@@ -20,6 +21,8 @@ if TYPE_CHECKING:
 def find(case: UnitCase) -> Faults:
     """Hold the velocity, as stated or from the face area, against the limit."""
     unit, most = case.unit, case.site.limits.face_velocity_cooling
+    if known(lambda: case.governing.coil_mode) == "dry":
+        return  # no moisture, nothing to carry over
     if unit.stated("cool_face_velocity"):
         velocity, key = unit.need(Unit.cool_face_velocity), "cool_face_velocity"
     elif unit.stated("cool_face_area"):

@@ -7,7 +7,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CAPACITY, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.review.shortfall import is_short
 from schedtui.schedule.catalogue.unit import Unit
@@ -34,6 +34,7 @@ CHECK = Check(
     severity=Severity.SHORT,
     sentence="The scheduled heating carries the heating coil's load at every heating condition.",
     source="ASHRAE Handbook—Fundamentals, ch. 18",
+    rank=CAPACITY,
     judges=("heat_total",),
     heating=find,
 )

@@ -7,7 +7,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import TEMPERATURE
@@ -37,6 +37,6 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Air leaves a heating coil no colder than it enters.",
     source="by definition: a heating coil heats",
-    explains=True,
+    rank=CONTRADICTION,
     unit=find,
 )

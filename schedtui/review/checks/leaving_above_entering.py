@@ -7,7 +7,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
@@ -29,11 +29,12 @@ def find(case: UnitCase) -> Faults:
         if lat is not None and eat is not None and lat > eat:
             found = True
             yield Fault(
-                "leaving air {scheduled} is above entering air {required}",
+                "{what} {scheduled} is above {other} {required}",
                 (leaving.key, entering.key),
                 lat,
                 eat,
                 TEMPERATURE,
+                {"what": leaving.label.lower(), "other": entering.label.lower()},
             )
     rated = known(lambda: case.rated)
     if found or rated is None or unit.cool_lat_db is None or unit.cool_lat_at == "unit":
@@ -53,6 +54,6 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Air leaves a cooling coil no warmer than it enters.",
     source="by definition: a cooling coil cools",
-    explains=True,
+    rank=CONTRADICTION,
     unit=find,
 )

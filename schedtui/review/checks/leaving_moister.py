@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Severity
 from schedtui.units import HUMIDITY_RATIO
@@ -56,7 +56,7 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Air leaves a cooling coil no moister than it enters.",
     source="ASHRAE Handbook—HVAC Systems and Equipment, air-cooling coils",
-    explains=True,
+    rank=CONTRADICTION,
     judges=("cool_lat_wb",),
     unit=find,
 )

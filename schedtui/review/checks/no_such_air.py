@@ -9,7 +9,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from schedtui.errors import Absent, AirError
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import IMPOSSIBLE, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.condition import HUMIDITIES
 from schedtui.schedule.catalogue.unit import Unit
@@ -56,7 +56,7 @@ def find_in_condition(case: ConditionCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Every stated pair of properties is one that moist air can have.",
-    explains=True,
+    rank=IMPOSSIBLE,
     source="ASHRAE Handbook—Fundamentals, ch. 1",
     unit=find_in_unit,
     condition=find_in_condition,

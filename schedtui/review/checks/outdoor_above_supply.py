@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import AIRFLOW
@@ -35,7 +35,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Outdoor air is not above supply air.",
-    explains=True,
+    rank=CONTRADICTION,
     source="conservation of mass",
     judges=("outdoor_airflow",),
     unit=find,

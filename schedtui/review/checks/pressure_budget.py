@@ -41,7 +41,7 @@ def find(case: UnitCase) -> Faults:
             together,
             AIR_PRESSURE,
         )
-    elif len(drops) >= _ENOUGH and total > together * _LEFT_OVER:
+    elif unit.stated("filter_drop") and len(drops) >= _ENOUGH and total > together * _LEFT_OVER:
         yield Fault(
             "total pressure {scheduled}, external and the drops stated are only {required}",
             keys,

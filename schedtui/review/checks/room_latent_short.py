@@ -47,5 +47,6 @@ CHECK = Check(
     sentence="The supply air takes the room's latent load.",
     source="ASHRAE Handbook—Fundamentals, ch. 18",
     judges=("room_latent",),
+    derived=("cool_lat_db",),
     cooling=find,
 )

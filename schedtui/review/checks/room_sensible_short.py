@@ -39,5 +39,6 @@ CHECK = Check(
     sentence="The supply air takes the room's sensible load.",
     source="ASHRAE Handbook—Fundamentals, ch. 18",
     judges=("room_sensible",),
+    derived=("cool_lat_db",),
     cooling=find,
 )

@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import CONTRADICTION, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import LOAD
@@ -35,7 +35,7 @@ def find(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="The scheduled sensible capacity is not above the total.",
-    explains=True,
+    rank=CONTRADICTION,
     source="by definition: total is sensible and latent",
     judges=("cool_sensible",),
     unit=find,

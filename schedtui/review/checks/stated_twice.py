@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import IMPOSSIBLE, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import PERCENT
@@ -54,7 +54,7 @@ def _two_bypasses(case: UnitCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="Nothing is stated in two ways at once.",
-    explains=True,
+    rank=IMPOSSIBLE,
     source="by definition",
     unit=find,
 )

@@ -9,15 +9,30 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.air.coil import LOAD_PER_TON
+from schedtui.air.fan import shaft_power
+from schedtui.review.check import SLIP, Check, Faults
 from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Measure, Severity
+from schedtui.review.fluid_side import COOLING, SIDES
 from schedtui.review.slips import slips
 from schedtui.schedule.catalogue.field import Field
 from schedtui.schedule.catalogue.unit import Unit
-from schedtui.units import AIRFLOW, LOAD, PERCENT, TEMPERATURE, Quantity, System
+from schedtui.units import (
+    AIR_PRESSURE,
+    AIRFLOW,
+    LOAD,
+    PERCENT,
+    SHAFT_POWER,
+    TEMPERATURE,
+    WATER_FLOW,
+    Quantity,
+    System,
+)
 
 if TYPE_CHECKING:
+    from collections.abc import Container
+
     from schedtui.review.case import UnitCase
 
 Number = Field[float | None]
@@ -44,10 +59,14 @@ _USUAL: dict[System, tuple[tuple[Number, float, float], ...]] = {
 
 
 def find(case: UnitCase) -> Faults:
-    """Look at percentages, temperatures, loads and the supply airflow."""
-    yield from _fractions(case)
-    yield from _temperatures(case)
-    yield from _loads_and_airflow(case)
+    """Look at percentages, temperatures, loads, the supply airflow, water and fan."""
+    fractions = list(_fractions(case))
+    suspects = [*_temperatures(case), *_loads_and_airflow(case), *_heating(case)]
+    yield from (*fractions, *suspects)
+    # Whatever follows from a number that is suspect already is not to be accused for it.
+    blamed = {fault.fields[0] for fault in (*fractions, *suspects)}
+    yield from _water(case, blamed)
+    yield from _fan(case, blamed)
 
 
 def _fractions(case: UnitCase) -> Faults:
@@ -99,7 +118,7 @@ def _loads_and_airflow(case: UnitCase) -> Faults:
         if (scheduled := unit.value_of(field)) and own and own > 0
     }
     total, sensible = ratios.get(Unit.cool_total), ratios.get(Unit.cool_sensible)
-    if total and sensible and abs(total / sensible - 1) <= _SAME:
+    if total and sensible and abs(total / sensible - 1) <= _SAME and not _loads_stand_alone(case):
         # Both loads off by one factor: the airflow that makes both is the likelier slip.
         airflow = unit.need(Unit.supply_airflow)
         fault = _suspect(Unit.supply_airflow, airflow, 1 / total, AIRFLOW, case.site.system)
@@ -110,6 +129,69 @@ def _loads_and_airflow(case: UnitCase) -> Faults:
         fault = _suspect(field, unit.need(field), ratio, LOAD, case.site.system)
         if fault is not None:
             yield fault
+
+
+def _loads_stand_alone(case: UnitCase) -> bool:
+    """Tell whether more of the row agrees with its airflow than with its loads."""
+    unit, supply = case.unit, case.unit.supply_airflow or 0.0
+    returned, outdoor = unit.return_airflow, unit.outdoor_airflow or 0.0
+    total, tons = unit.cool_total or 0.0, unit.cool_tons
+    carried = known(COOLING.carried, unit, case.site.system)
+    stated, own = unit.cool_face_velocity, known(lambda: case.face_velocity)
+    with_airflow = (
+        returned is not None and _agree(returned + outdoor, supply),
+        stated is not None and own is not None and _agree(stated, own),
+    )
+    with_loads = (
+        tons is not None and _agree(tons * LOAD_PER_TON[case.site.system], total),
+        carried is not None and COOLING.runs(unit) and _agree(carried, total),
+    )
+    return sum(with_airflow) > sum(with_loads)
+
+
+def _agree(one: float, other: float) -> bool:
+    return abs(one - other) <= _SAME * other
+
+
+def _heating(case: UnitCase) -> Faults:
+    """Hold the heating against the row's own, else against what the coil needs."""
+    total = case.unit.heat_total
+    own = known(lambda: case.row_heat.heat_load) or known(lambda: case.heat_governing.heat_load)
+    if total and own and own > 0:
+        yield from _if_any(_suspect(Unit.heat_total, total, total / own, LOAD, case.site.system))
+
+
+def _water(case: UnitCase, blamed: Container[str]) -> Faults:
+    """Hold each flow against what the scheduled load asks for, unless the load is suspect."""
+    unit = case.unit
+    for side in SIDES:
+        if not side.runs(unit) or not side.stated(unit) or side.total.key in blamed:
+            continue
+        total, flow = unit.value_of(side.total), unit.value_of(side.flow)
+        carried = known(side.carried, unit, case.site.system)
+        if total and flow and carried:
+            yield from _if_any(
+                _suspect(side.flow, flow, carried / total, WATER_FLOW, case.site.system)
+            )
+
+
+def _fan(case: UnitCase, blamed: Container[str]) -> Faults:
+    """Hold the shaft power against airflow, pressure and efficiency; else the pressure."""
+    unit, system = case.unit, case.site.system
+    power, pressure, efficiency = unit.fan_power, unit.fan_total_pressure, unit.fan_efficiency
+    airflow = known(lambda: case.fan_airflow)
+    if "fan_efficiency" in blamed or "supply_airflow" in blamed:
+        return
+    if not power or not pressure or not efficiency or not airflow:
+        return
+    own = shaft_power(airflow / unit.fan_count, pressure, efficiency, system)
+    by_pressure = _suspect(Unit.fan_total_pressure, pressure, own / power, AIR_PRESSURE, system)
+    by_power = _suspect(Unit.fan_power, power, power / own, SHAFT_POWER, system)
+    yield from _if_any(by_pressure or by_power)
+
+
+def _if_any(fault: Fault | None) -> Faults:
+    return () if fault is None else (fault,)
 
 
 def _suspect(
@@ -137,7 +219,7 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="No number looks as if typed in another unit.",
     source="common practice",
-    explains=True,
+    rank=SLIP,
     reads_digits=False,
     unit=find,
 )

@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
-from schedtui.review.check import Check, Faults
+from schedtui.review.check import IMPOSSIBLE, Check, Faults
 from schedtui.review.finding import Fault, Severity
 from schedtui.schedule.catalogue.condition import Condition
 from schedtui.schedule.catalogue.field import Field
@@ -59,7 +59,7 @@ def find_in_condition(case: ConditionCase) -> Faults:
 CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="No wet bulb is above its dry bulb.",
-    explains=True,
+    rank=IMPOSSIBLE,
     source="ASHRAE Handbook—Fundamentals, ch. 1",
     unit=find_in_unit,
     condition=find_in_condition,

@@ -1,0 +1,87 @@
+"""The fluid side of a unit's coils: which keys state it, and what heat it can carry.
+
+One description serves cooling coil, heating coil and preheat. Judges nothing.
+"""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+from typing import TYPE_CHECKING, cast
+
+from schedtui.air.fluid import Fluid, FluidKind, by_volume, fluid_heat
+from schedtui.schedule.catalogue.unit import Unit
+
+if TYPE_CHECKING:
+    from schedtui.schedule.catalogue.field import Field
+    from schedtui.units import System
+
+
+@dataclass(frozen=True, slots=True)
+class FluidSide:
+    """The keys that state the fluid side of a coil.
+
+    Args:
+        what: the coil, in words.
+        total: its scheduled load.
+        kind: what it is fed by.
+        wet_kind: the kind that makes the keys water through this coil.
+        entering: entering fluid.
+        leaving: leaving fluid.
+        flow: flow of the fluid.
+        fluid: which fluid.
+        glycol: share of glycol.
+    """
+
+    what: str
+    total: Field[float | None]
+    kind: Field[str]
+    wet_kind: str
+    entering: Field[float | None]
+    leaving: Field[float | None]
+    flow: Field[float | None]
+    fluid: Field[str]
+    glycol: Field[float | None]
+
+    def runs(self, unit: Unit) -> bool:
+        """Tell whether the coil is fed by water or glycol."""
+        return unit.value_of(self.kind) == self.wet_kind
+
+    def stated(self, unit: Unit) -> bool:
+        """Tell whether flow and both temperatures are stated."""
+        return unit.stated(self.flow.key, self.entering.key, self.leaving.key)
+
+    def fluid_of(self, unit: Unit) -> Fluid:
+        """Return the fluid through the coil."""
+        unit.refuse_bad(self.fluid, Unit.glycol_by)
+        unit.refuse_bad(self.glycol)
+        kind = cast("FluidKind", unit.value_of(self.fluid))
+        share = unit.value_of(self.glycol) or 0.0
+        return by_volume(kind, share) if unit.glycol_by == "volume" else Fluid(kind, share)
+
+    def carried(self, unit: Unit, system: System) -> float:
+        """Return the heat that flow and temperatures carry as stated [MBH | kW].
+
+        Raises:
+            Absent: one of them is not stated.
+            FluidError: the fluid is outside its data.
+        """
+        flow, entering = unit.need(self.flow), unit.need(self.entering)
+        leaving = unit.need(self.leaving)
+        return fluid_heat(flow, entering, leaving, self.fluid_of(unit), system)
+
+
+COOLING = FluidSide(
+    "cooling coil", Unit.cool_total, Unit.cool_kind, "chilled water",
+    Unit.cool_ewt, Unit.cool_lwt, Unit.cool_flow, Unit.cool_fluid, Unit.cool_glycol,
+)  # fmt: skip
+HEATING = FluidSide(
+    "heating coil", Unit.heat_total, Unit.heat_kind, "hot water",
+    Unit.heat_ewt, Unit.heat_lwt, Unit.heat_flow, Unit.heat_fluid, Unit.heat_glycol,
+)  # fmt: skip
+PREHEAT = FluidSide(
+    "preheat", Unit.preheat_total, Unit.preheat_kind, "hot water",
+    Unit.preheat_ewt, Unit.preheat_lwt, Unit.preheat_flow, Unit.preheat_fluid,
+    Unit.preheat_glycol,
+)  # fmt: skip
+HEATING_SIDES = (HEATING, PREHEAT)
+SIDES = (COOLING, HEATING, PREHEAT)

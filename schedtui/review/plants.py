@@ -1,0 +1,179 @@
+"""What the units together draw from a plant, condition by condition.
+
+A sum is coincident: every unit at the same condition. Judges nothing.
+"""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+from typing import TYPE_CHECKING
+
+from schedtui.air.fluid import flow_for
+from schedtui.errors import Absent
+from schedtui.review.figure import figure, known
+from schedtui.review.fluid_side import COOLING, HEATING, PREHEAT, FluidSide
+
+if TYPE_CHECKING:
+    from collections.abc import Iterator, Sequence
+
+    from schedtui.review.case import UnitCase
+    from schedtui.review.site import Site
+    from schedtui.schedule.catalogue.plant import Plant
+    from schedtui.schedule.catalogue.unit import Unit
+    from schedtui.schedule.view import Schedule
+
+
+@dataclass(frozen=True, slots=True)
+class Feed:
+    """A unit's coil on a plant.
+
+    Args:
+        label: how messages name the unit.
+        case: the unit with its evaluations.
+        side: which of its coils.
+        share: how much of the unit's load this plant takes, units standing by left out: the
+            number of units times the plant's part in them.
+    """
+
+    label: str
+    case: UnitCase
+    side: FluidSide
+    share: float
+
+    def load(self, condition: str) -> float | None:
+        """Return what one unit's coil requires at a condition [MBH | kW], None if not known."""
+        if self.side is COOLING:
+            at = next((one for one in self.case.cooling if one.name == condition), None)
+            return known(lambda: at.coil.total) if at is not None else 0.0
+        at_heat = next((one for one in self.case.heating if one.name == condition), None)
+        if at_heat is None:
+            return 0.0
+        if self.side is PREHEAT:
+            return known(lambda: at_heat.preheat_load)
+        return known(lambda: at_heat.heat_load)
+
+    def flow(self, load: float) -> float | None:
+        """Return one unit's flow [gpm | L/s]: as scheduled, else what its load asks for."""
+        unit, side = self.case.unit, self.side
+        stated = unit.value_of(side.flow)
+        if stated is not None:
+            return stated
+        entering, leaving = unit.value_of(side.entering), unit.value_of(side.leaving)
+        if entering is None or leaving is None or entering == leaving:
+            return None
+        system = self.case.site.system
+        return known(lambda: flow_for(load, entering, leaving, side.fluid_of(unit), system))
+
+
+class PlantCase:
+    """A plant with what it feeds.
+
+    Args:
+        plant: the plant as scheduled.
+        schedule: the schedule it stands in.
+        site: where it stands.
+        units: every unit of the schedule with its label.
+    """
+
+    def __init__(
+        self, plant: Plant, schedule: Schedule, site: Site, units: Sequence[tuple[str, UnitCase]]
+    ) -> None:
+        self.plant = plant
+        self.schedule = schedule
+        self.site = site
+        self._units = units
+
+    @property
+    def name(self) -> str:
+        """The plant's name."""
+        return self.plant.name or ""
+
+    @figure
+    def feeds(self) -> tuple[Feed, ...]:
+        """The coils on the plant."""
+        return tuple(feed for label, case in self._units for feed in self._feeds_of(label, case))
+
+    def _feeds_of(self, label: str, case: UnitCase) -> Iterator[Feed]:
+        unit = case.unit
+        plants = _plants_of(unit, self.schedule, self.plant.serves)
+        if self.plant not in plants:
+            return
+        number = max(unit.quantity - unit.standby, 0)
+        share = number * _part(self.plant, plants)
+        sides = (COOLING,) if self.plant.serves == "cooling" else (HEATING, PREHEAT)
+        for side in sides:
+            if side.runs(unit) and _exists(unit, side):
+                yield Feed(label, case, side, share)
+
+    def unknown(self, condition: str) -> tuple[str, ...]:
+        """Name the units whose load at a condition is not known."""
+        return tuple(feed.label for feed in self.feeds if feed.load(condition) is None)
+
+    @figure
+    def governing(self) -> str:
+        """The condition with the greatest load, the first of equals.
+
+        Raises:
+            Absent: no condition of the plant's season is there, or nothing is fed.
+        """
+        conditions = [
+            one.name or "" for one in self.schedule.conditions if one.season == self.plant.serves
+        ]
+        if not conditions or not self.feeds:
+            raise Absent(why=f"plant {self.name} feeds no unit at any condition")
+        return max(conditions, key=self.load_at)
+
+    def load_at(self, condition: str) -> float:
+        """Return the units' load together at a condition, diversity counted [MBH | kW]."""
+        together = sum(feed.share * (feed.load(condition) or 0.0) for feed in self.feeds)
+        return together * self._diversity
+
+    @figure
+    def load(self) -> float:
+        """The load at the governing condition [MBH | kW]."""
+        return self.load_at(self.governing)
+
+    @figure
+    def flow(self) -> float:
+        """The flow at the governing condition, diversity counted [gpm | L/s]."""
+        together = 0.0
+        for feed in self.feeds:
+            flow = feed.flow(feed.load(self.governing) or 0.0)
+            if flow is None:
+                raise Absent(feed.side.flow.key, why=f"the flow of {feed.label} is not known")
+            together += feed.share * flow
+        return together * self._diversity
+
+    @property
+    def _diversity(self) -> float:
+        return self.plant.diversity / 100
+
+
+def _plants_of(unit: Unit, schedule: Schedule, serves: str) -> list[Plant]:
+    """Return the plants of a kind that feed a unit: those it names, else all of that kind."""
+    named = unit.plants
+    return [
+        plant
+        for plant in schedule.plants
+        if plant.serves == serves and (named is None or plant.name in named)
+    ]
+
+
+def _part(plant: Plant, plants: Sequence[Plant]) -> float:
+    """Return a plant's part in a unit on several: by their capacities, equal where unknown."""
+    capacities = [one.capacity or 0.0 for one in plants]
+    if not all(capacities):
+        return 1 / len(plants)
+    return (plant.capacity or 0.0) / sum(capacities)
+
+
+def _exists(unit: Unit, side: FluidSide) -> bool:
+    """Tell whether a unit has a coil at all, by any key that only such a coil has."""
+    return any(map(unit.stated, (side.total.key, side.flow.key, _LEAVING[side.what])))
+
+
+_LEAVING = {
+    COOLING.what: "cool_lat_db",
+    HEATING.what: "heat_lat_db",
+    PREHEAT.what: "preheat_lat_db",
+}
