@@ -11,6 +11,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 from typing import TYPE_CHECKING, Final, Literal
 
+from schedtui.air.derivation import saturation
 from schedtui.air.flow import (
     PER_HOUR,
     PER_THOUSAND,
@@ -126,16 +127,17 @@ def heating_load(
     Source: ASHRAE Handbook—Fundamentals, ch. 1, moist air sensible heating.
     """
     system = entering.air.system
-    leaving = entering.heated_to(leaving_db)
+    # A mixture's enthalpy is not to the last bit that of its dry bulb: no warming, no load.
+    leaving = entering if leaving_db == entering.db else entering.heated_to(leaving_db)
     load = heat_flow(mass, leaving.h - entering.h, system)
     if steps is not None:
         numbers: tuple[Number, ...] = (
-            ("m", mass, AIR_MASS_FLOW),
+            ("m_c", mass, AIR_MASS_FLOW),
             ("h_l", leaving.h, ENTHALPY),
             ("h_e", entering.h, ENTHALPY),
         )
-        formula = f"q = m · (h_l − h_e){PER_THOUSAND[system]}"
-        steps.append(Step("q", "heating load", formula, numbers, load, LOAD, HANDBOOK))
+        formula = f"q_h = m_c · (h_l − h_e){PER_THOUSAND[system]}"
+        steps.append(Step("q_h", "heating load", formula, numbers, load, LOAD, HANDBOOK))
     return load
 
 
@@ -159,15 +161,7 @@ def apparatus_dew_point(
     if entering.db > leaving.db and entering.w - leaving.w > _DRY:
         adp = first_crossing(entering, leaving)
     if steps is not None and adp is not None:
-        numbers: tuple[Number, ...] = (
-            ("W_e", entering.w, HUMIDITY_RATIO),
-            ("W_l", leaving.w, HUMIDITY_RATIO),
-            ("t_e", entering.db, TEMPERATURE),
-            ("t_l", leaving.db, TEMPERATURE),
-        )
-        formula = "W_s(t_adp) = W_l + (W_e − W_l) · (t_adp − t_l) / (t_e − t_l)"
-        name = "apparatus dew point"
-        steps.append(Step("t_adp", name, formula, numbers, adp, TEMPERATURE, HANDBOOK_COILS))
+        _append_adp(steps, entering, leaving, adp)
     return adp
 
 
@@ -232,11 +226,13 @@ def leaving_of(
     corner = entering.h - enthalpy_difference(mass, total - sensible, air.system)
     leaving = air.by_dry_bulb_and_enthalpy(entering.db, corner).heated_to(lat_db)
     if steps is not None:
-        _append_leaving(steps, entering, mass, total, sensible, corner, leaving.w)
+        _append_leaving(steps, entering, mass, total, sensible, corner, leaving)
     return leaving
 
 
-def coil_leaving(entering: State, scheduled_leaving: State) -> tuple[State, CoilMode]:
+def coil_leaving(
+    entering: State, scheduled_leaving: State, steps: Steps | None = None
+) -> tuple[State, CoilMode]:
     """Return the air that leaves a cooling coil held at its scheduled leaving state, and its mode.
 
     A coil never heats: entering air no warmer than the scheduled leaving dry bulb passes as it is.
@@ -245,11 +241,15 @@ def coil_leaving(entering: State, scheduled_leaving: State) -> tuple[State, Coil
     Args:
         entering: air that enters the coil.
         scheduled_leaving: air that is to leave it.
+        steps: the working to append to, where the coil runs dry; d is the scheduled leaving air.
     """
     if entering.db <= scheduled_leaving.db:
         return entering, "off"
     if entering.w < scheduled_leaving.w:
-        return entering.heated_to(scheduled_leaving.db), "dry"
+        dry = entering.heated_to(scheduled_leaving.db)
+        if steps is not None:
+            _append_dry(steps, entering, dry)
+        return dry, "dry"
     return scheduled_leaving, "wet"
 
 
@@ -264,38 +264,75 @@ def _condensate_heat(condensate: float, leaving: State) -> float:
     return condensate * 4.186 * leaving.db / 3600
 
 
+def _append_dry(steps: Steps, entering: State, leaving: State) -> None:
+    """Append the air that leaves a coil at its scheduled dry bulb and no drier than it entered."""
+    t_d, w_e = ("t_d", leaving.db, TEMPERATURE), ("W_e", entering.w, HUMIDITY_RATIO)
+    name = "leaving dry bulb: as scheduled"
+    steps.append(Step("t_l", name, "t_l = t_d", (t_d,), leaving.db, TEMPERATURE, HANDBOOK_COILS))
+    name = "leaving humidity ratio: as it entered"
+    steps.append(Step("W_l", name, "W_l = W_e", (w_e,), leaving.w, HUMIDITY_RATIO, HANDBOOK_COILS))
+    t_l, w_l = ("t_l", leaving.db, TEMPERATURE), ("W_l", leaving.w, HUMIDITY_RATIO)
+    name = "enthalpy of the leaving air"
+    steps.append(enthalpy_step(leaving.air.system, "h_l", name, t_l, w_l, leaving.h))
+
+
+def _append_adp(steps: Steps, entering: State, leaving: State, adp: float) -> None:
+    """Append the apparatus dew point and, for it, both sides of the equation that it solves."""
+    t_adp: Number = ("t_adp", adp, TEMPERATURE)
+    name = "apparatus dew point: the temperature where line and saturation meet, as shown next"
+    formula = "W_sat(t_adp) = W_adp(t_adp)"
+    steps.append(Step("t_adp", name, formula, (), adp, TEMPERATURE, HANDBOOK_COILS))
+    slope = (entering.w - leaving.w) / (entering.db - leaving.db)
+    numbers: tuple[Number, ...] = (
+        ("W_l", leaving.w, HUMIDITY_RATIO),
+        ("W_e", entering.w, HUMIDITY_RATIO),
+        t_adp,
+        ("t_l", leaving.db, TEMPERATURE),
+        ("t_e", entering.db, TEMPERATURE),
+    )
+    formula = "W_adp = W_l + (W_e − W_l) · (t_adp − t_l) / (t_e − t_l)"
+    name = "humidity ratio there on the line through entering and leaving air"
+    w = leaving.w + slope * (adp - leaving.db)
+    steps.append(Step("W_adp", name, formula, numbers, w, HUMIDITY_RATIO, HANDBOOK_COILS))
+    saturation(steps, leaving.air.formulas, t_adp, leaving.air.pressure)
+
+
 def _append_load(
     steps: Steps, mass: float, entering: State, leaving: State, corner: float, load: CoilLoad
 ) -> None:
     """Append total, sensible, latent, their ratio and the tons."""
     system = entering.air.system
-    m: Number = ("m", mass, AIR_MASS_FLOW)
+    m: Number = ("m_c", mass, AIR_MASS_FLOW)
     h_e: Number = ("h_e", entering.h, ENTHALPY)
     h_l: Number = ("h_l", leaving.h, ENTHALPY)
-    h_x: Number = ("h_x", corner, ENTHALPY)
+    h_el: Number = ("h_el", corner, ENTHALPY)
     q_t: Number = ("q_t", load.total, LOAD)
     q_s: Number = ("q_s", load.sensible, LOAD)
     per = PER_THOUSAND[system]
-    total = f"q_t = m · (h_e − h_l){per}"
-    sensible = f"q_s = m · (h_x − h_l){per}"
-    steps.append(Step("q_t", "total", total, (m, h_e, h_l), load.total, LOAD, HANDBOOK))
+    total = f"q_t = m_c · (h_e − h_l){per}"
+    sensible = f"q_s = m_c · (h_el − h_l){per}"
+    steps.append(Step("q_t", "coil total", total, (m, h_e, h_l), load.total, LOAD, HANDBOOK))
     steps.append(
         enthalpy_step(
             system,
-            "h_x",
+            "h_el",
             "enthalpy at the entering dry bulb and the leaving humidity ratio",
             ("t_e", entering.db, TEMPERATURE),
             ("W_l", leaving.w, HUMIDITY_RATIO),
             corner,
         )
     )
-    steps.append(Step("q_s", "sensible", sensible, (m, h_x, h_l), load.sensible, LOAD, HANDBOOK))
-    steps.append(Step("q_l", "latent", "q_l = q_t − q_s", (q_t, q_s), load.latent, LOAD, HANDBOOK))
+    steps.append(
+        Step("q_s", "coil sensible", sensible, (m, h_el, h_l), load.sensible, LOAD, HANDBOOK)
+    )
+    steps.append(
+        Step("q_l", "coil latent", "q_l = q_t − q_s", (q_t, q_s), load.latent, LOAD, HANDBOOK)
+    )
     if load.shr is not None:
         name = "sensible heat ratio"
         steps.append(Step("SHR", name, "SHR = q_s / q_t", (q_s, q_t), load.shr, RATIO, HANDBOOK))
-    tons = f"T = q_t / {LOAD_PER_TON[system]:.8g}"
-    steps.append(Step("T", "total in tons", tons, (q_t,), load.tons, REFRIGERATION, HANDBOOK))
+    tons = f"tons = q_t / {LOAD_PER_TON[system]:.8g}"
+    steps.append(Step("tons", "total in tons", tons, (q_t,), load.tons, REFRIGERATION, HANDBOOK))
 
 
 def _append_condensate(
@@ -304,16 +341,16 @@ def _append_condensate(
     """Append the condensate and the heat that leaves with it."""
     system = entering.air.system
     numbers: tuple[Number, ...] = (
-        ("m", mass, AIR_MASS_FLOW),
+        ("m_c", mass, AIR_MASS_FLOW),
         ("W_e", entering.w, HUMIDITY_RATIO),
         ("W_l", leaving.w, HUMIDITY_RATIO),
     )
-    formula = f"m_w = m · (W_e − W_l){PER_HOUR[system]}"
+    formula = f"m_w = m_c · (W_e − W_l){PER_HOUR[system]}"
     water = load.condensate
     steps.append(Step("m_w", "condensate", formula, numbers, water, MOISTURE_FLOW, HANDBOOK))
     formula = f"q_w = m_w · {_CONDENSATE_ENTHALPY[system]}{_CONDENSATE_UNITS[system]}"
     numbers = (("m_w", water, MOISTURE_FLOW), ("t_l", leaving.db, TEMPERATURE))
-    name = "heat leaving with the condensate, within the total"
+    name = "heat that leaves with the condensate; part of the total, not taken off it"
     steps.append(Step("q_w", name, formula, numbers, load.condensate_heat, LOAD, HANDBOOK))
 
 
@@ -324,7 +361,7 @@ def _append_leaving(
     total: float,
     sensible: float,
     corner: float,
-    w: float,
+    leaving: State,
 ) -> None:
     """Append how the leaving humidity ratio follows from the loads."""
     times, coefficients = {
@@ -335,13 +372,16 @@ def _append_leaving(
         ("h_e", entering.h, ENTHALPY),
         ("q_t", total, LOAD),
         ("q_s", sensible, LOAD),
-        ("m", mass, AIR_MASS_FLOW),
+        ("m_c", mass, AIR_MASS_FLOW),
     )
-    formula = f"h_x = h_e − (q_t − q_s){times} / m"
+    formula = f"h_el = h_e − (q_t − q_s){times} / m_c"
     name = "enthalpy at the entering dry bulb and the leaving humidity ratio"
-    steps.append(Step("h_x", name, formula, numbers, corner, ENTHALPY, HANDBOOK))
+    steps.append(Step("h_el", name, formula, numbers, corner, ENTHALPY, HANDBOOK))
     dry, vapour, steam = coefficients
-    formula = f"W_l = (h_x − {dry} · t_e) / ({vapour} + {steam} · t_e)"
-    numbers = (("h_x", corner, ENTHALPY), ("t_e", entering.db, TEMPERATURE))
+    formula = f"W_l = (h_el − {dry} · t_e) / ({vapour} + {steam} · t_e)"
+    numbers = (("h_el", corner, ENTHALPY), ("t_e", entering.db, TEMPERATURE))
     name = "leaving humidity ratio"
-    steps.append(Step("W_l", name, formula, numbers, w, HUMIDITY_RATIO, HANDBOOK))
+    steps.append(Step("W_l", name, formula, numbers, leaving.w, HUMIDITY_RATIO, HANDBOOK))
+    t_l, w_l = ("t_l", leaving.db, TEMPERATURE), ("W_l", leaving.w, HUMIDITY_RATIO)
+    name = "enthalpy of the leaving air"
+    steps.append(enthalpy_step(entering.air.system, "h_l", name, t_l, w_l, leaving.h))

@@ -7,18 +7,29 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING, Final
 
-from schedtui.air.flow import PER_THOUSAND, enthalpy_difference, heat_flow
-from schedtui.air.step import HANDBOOK, HANDBOOK_LOADS, Number, Step, Steps
+from schedtui.air.flow import PER_THOUSAND, enthalpy_difference, heat_flow, volume_flow
+from schedtui.air.step import (
+    DEFINITION,
+    HANDBOOK,
+    HANDBOOK_LOADS,
+    Number,
+    Step,
+    Steps,
+    enthalpy_step,
+)
 from schedtui.errors import AirError
 from schedtui.units import (
     AIR_MASS_FLOW,
     AIR_PRESSURE,
     AIRFLOW,
+    COUNT,
     ENTHALPY,
     HUMIDITY_RATIO,
     LOAD,
     PERCENT,
     SHAFT_POWER,
+    SPECIFIC_VOLUME,
+    TEMPERATURE,
     TEMPERATURE_DIFFERENCE,
     System,
 )
@@ -63,13 +74,51 @@ def shaft_power(
     power = airflow * total_pressure / (AIR_POWER[system] * efficiency / 100)
     if steps is not None:
         numbers: tuple[Number, ...] = (
-            ("Q", airflow, AIRFLOW),
-            ("p", total_pressure, AIR_PRESSURE),
-            ("η", efficiency, PERCENT),
+            ("Q_f", airflow, AIRFLOW),
+            ("p_f", total_pressure, AIR_PRESSURE),
+            ("η_f", efficiency, PERCENT),
         )
-        formula = f"P = Q · p / ({AIR_POWER[system]:.0f} · η / 100)"
+        formula = f"P = Q_f · p_f / ({AIR_POWER[system]:.0f} · η_f / 100)"
         steps.append(Step("P", "fan shaft power", formula, numbers, power, SHAFT_POWER, _AMCA))
     return power
+
+
+def inlet_airflow(inlet: State, mass: float, steps: Steps | None = None) -> float:
+    """Return the actual volume flow at a fan's inlet [cfm | L/s].
+
+    Args:
+        inlet: air at the inlet.
+        mass: dry air through the fan [lb/h | kg/s].
+        steps: the working to append to.
+    """
+    air = inlet.air
+    named = None if steps is None else steps.named("i")
+    v = inlet.specific_volume(named)
+    flow = volume_flow(mass, "actual", air, v)
+    if steps is not None:
+        formula = {"IP": "Q_f = m_s · v_i / 60", "SI": "Q_f = m_s · v_i · 1000"}[air.system]
+        numbers: tuple[Number, ...] = (
+            ("m_s", mass, AIR_MASS_FLOW),
+            ("v_i", v, SPECIFIC_VOLUME),
+        )
+        name = "actual volume flow at the fan's inlet"
+        steps.append(Step("Q_f", name, formula, numbers, flow, AIRFLOW, HANDBOOK))
+    return flow
+
+
+def power_of_all(power: float, count: float, steps: Steps | None = None) -> float:
+    """Return the shaft power of so many equal fans [hp | kW].
+
+    Args:
+        power: of each [hp | kW].
+        count: how many there are.
+        steps: the working to append to.
+    """
+    if steps is not None and count != 1:
+        numbers: tuple[Number, ...] = (("P_each", power, SHAFT_POWER), ("n", count, COUNT))
+        name, formula = "shaft power of all fans", "P = n · P_each"
+        steps.append(Step("P", name, formula, numbers, power * count, SHAFT_POWER, DEFINITION))
+    return power * count
 
 
 def heat_to_air(
@@ -117,7 +166,7 @@ def rise(air_in: State, mass: float, heat: float, steps: Steps | None = None) ->
         air_in: air at the fan, on either side.
         mass: dry air [lb/h | kg/s].
         heat: what the fan puts into it [MBH | kW].
-        steps: the working to append to.
+        steps: the working to append to, where there is heat.
 
     Raises:
         AirError: no air flows.
@@ -127,19 +176,19 @@ def rise(air_in: State, mass: float, heat: float, steps: Steps | None = None) ->
     system = air_in.air.system
     gain = enthalpy_difference(mass, heat, system)
     difference = gain / _specific_heat(air_in)
-    if steps is not None:
+    if steps is not None and heat:
         times, coefficients = {
-            "IP": (" · 1000", "(0.24 + 0.444 · W)"),
-            "SI": ("", "(1.006 + 1.86 · W)"),
+            "IP": (" · 1000", "(0.24 + 0.444 · W_i)"),
+            "SI": ("", "(1.006 + 1.86 · W_i)"),
         }[system]
         numbers: tuple[Number, ...] = (
             ("q_f", heat, LOAD),
-            ("m", mass, AIR_MASS_FLOW),
-            ("W", air_in.w, HUMIDITY_RATIO),
+            ("m_s", mass, AIR_MASS_FLOW),
+            ("W_i", air_in.w, HUMIDITY_RATIO),
         )
-        formula = f"Δt = q_f{times} / (m · {coefficients})"
+        formula = f"Δt_f = q_f{times} / (m_s · {coefficients})"
         quantity = TEMPERATURE_DIFFERENCE
-        steps.append(Step("Δt", "fan rise", formula, numbers, difference, quantity, HANDBOOK))
+        steps.append(Step("Δt_f", "fan rise", formula, numbers, difference, quantity, HANDBOOK))
     return difference
 
 
@@ -155,7 +204,7 @@ def after_fan(air_in: State, mass: float, heat: float, steps: Steps | None = Non
     Raises:
         AirError: no air flows, or the air would leave the formulas' range.
     """
-    return air_in.heated_to(air_in.db + rise(air_in, mass, heat, steps))
+    return air_in.warmed_by(rise(air_in, mass, heat, steps), "behind the fan", steps)
 
 
 def heat_of_rise(
@@ -179,12 +228,24 @@ def heat_of_rise(
     heat = heat_flow(mass, air_out.h - air_in.h, system)
     if steps is not None:
         numbers: tuple[Number, ...] = (
-            ("m", mass, AIR_MASS_FLOW),
-            ("h_2", air_out.h, ENTHALPY),
-            ("h_1", air_in.h, ENTHALPY),
+            ("m_s", mass, AIR_MASS_FLOW),
+            ("h_out", air_out.h, ENTHALPY),
+            ("h_i", air_in.h, ENTHALPY),
         )
-        formula = f"q_f = m · (h_2 − h_1){PER_THOUSAND[system]}"
-        steps.append(Step("q_f", "heat of the rise", formula, numbers, heat, LOAD, HANDBOOK))
+        t_out, w_i = ("t_out", air_out.db, TEMPERATURE), ("W_i", air_in.w, HUMIDITY_RATIO)
+        parts: tuple[Number, ...] = (
+            ("t_i", air_in.db, TEMPERATURE),
+            ("Δt_f", rise_stated, TEMPERATURE_DIFFERENCE),
+        )
+        name, formula = "dry bulb behind the fan", "t_out = t_i + Δt_f"
+        steps.append(Step("t_out", name, formula, parts, air_out.db, TEMPERATURE, HANDBOOK))
+        steps.append(
+            enthalpy_step(system, "h_out", "enthalpy behind the fan", t_out, w_i, air_out.h)
+        )
+        formula = f"q_f = m_s · (h_out − h_i){PER_THOUSAND[system]}"
+        steps.append(
+            Step("q_f", "fan heat, that of the stated rise", formula, numbers, heat, LOAD, HANDBOOK)
+        )
     return heat
 
 

@@ -47,10 +47,10 @@ def mix(a: State, mass_a: float, b: State, mass_b: float, steps: Steps | None = 
     mixed = air.by_enthalpy(h, w)
     if steps is not None:
         masses: tuple[Number, ...] = (
-            ("m_a", mass_a, AIR_MASS_FLOW),
-            ("m_b", mass_b, AIR_MASS_FLOW),
+            ("m_p", mass_a, AIR_MASS_FLOW),
+            ("m_q", mass_b, AIR_MASS_FLOW),
         )
-        _append(steps, mixed, "mixed air", masses, _TWO_STREAMS, a, b)
+        _append(steps, mixed, "mixture", masses, _TWO_STREAMS, a, b)
     if mass_b == 0:
         return a  # itself, wet bulb as stated and all
     return b if mass_a == 0 else mixed
@@ -88,15 +88,15 @@ def unmix(
     other = air.by_enthalpy(h, w)
     if steps is not None:
         masses: tuple[Number, ...] = (
-            ("m_a", mass_mixed, AIR_MASS_FLOW),
-            ("m_b", mass_known, AIR_MASS_FLOW),
+            ("m_p", mass_mixed, AIR_MASS_FLOW),
+            ("m_q", mass_known, AIR_MASS_FLOW),
         )
-        _append(steps, other, "air beside the known stream", masses, _ONE_TAKEN_OUT, mixed, known)
+        _append(steps, other, "other stream", masses, _ONE_TAKEN_OUT, mixed, known)
     return other
 
 
-_TWO_STREAMS = "{x} = (m_a · {x}_a + m_b · {x}_b) / (m_a + m_b)"
-_ONE_TAKEN_OUT = "{x} = (m_a · {x}_a − m_b · {x}_b) / (m_a − m_b)"
+_TWO_STREAMS = "{x} = (m_p · {x}_a + m_q · {x}_b) / (m_p + m_q)"
+_ONE_TAKEN_OUT = "{x} = (m_p · {x}_a − m_q · {x}_b) / (m_p − m_q)"
 
 
 def _one_air(a: State, b: State) -> Air:
@@ -119,11 +119,19 @@ def _append(
     h_numbers = (*masses, ("h_a", a.h, ENTHALPY), ("h_b", b.h, ENTHALPY))
     w_numbers = (*masses, ("W_a", a.w, HUMIDITY_RATIO), ("W_b", b.w, HUMIDITY_RATIO))
     h_formula, w_formula = formula.format(x="h"), formula.format(x="W")
-    steps.append(Step("h", f"{name}: enthalpy", h_formula, h_numbers, result.h, ENTHALPY, HANDBOOK))
+    steps.append(
+        Step("h", f"enthalpy of the {name}", h_formula, h_numbers, result.h, ENTHALPY, HANDBOOK)
+    )
     steps.append(
         Step(
-            "W", f"{name}: humidity ratio", w_formula, w_numbers, result.w, HUMIDITY_RATIO, HANDBOOK
+            "W",
+            f"humidity ratio of the {name}",
+            w_formula,
+            w_numbers,
+            result.w,
+            HUMIDITY_RATIO,
+            HANDBOOK,
         )
     )
     h, w = ("h", result.h, ENTHALPY), ("W", result.w, HUMIDITY_RATIO)
-    steps.append(dry_bulb_step(result.air.system, "t", f"{name}: dry bulb", h, w, result.db))
+    steps.append(dry_bulb_step(result.air.system, "t", f"dry bulb of the {name}", h, w, result.db))

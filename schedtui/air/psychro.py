@@ -59,6 +59,12 @@ TEMPERATURE_RANGE: Final[dict[System, tuple[float, float]]] = {
 }
 """Temperatures that the saturation formulas hold for [°F | °C]."""
 
+TRIPLE_POINT: Final[dict[System, float]] = {"IP": 32.018, "SI": 0.01}
+"""The triple point of water [°F | °C]: saturation is over ice up to there, over water above."""
+
+FREEZING_POINT: Final[dict[System, float]] = {"IP": 32.0, "SI": 0.0}
+"""Wet bulb below which there is ice on the wick [°F | °C]."""
+
 _TOLERANCE = 1e-9  # degrees; the library's own leaves a wet bulb good to 0.002 °F only
 _DRIEST = 1e-7  # humidity ratio below which saturation would lie outside the formulas
 _OUT_OF_GAP = 1.0 - 1e-6
@@ -181,6 +187,20 @@ class Psychrometrics:
         Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 30.
         """
         return self._ask("GetHumRatioFromEnthalpyAndTDryBulb", h * self.thousand, db)
+
+    def saturation_pressure(self, temperature: float) -> float:
+        """Return the pressure of saturated vapour [psia | kPa].
+
+        Args:
+            temperature: [°F | °C].
+
+        Raises:
+            AirError: the temperature is outside the formulas' range.
+
+        Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 5 (ice) and 6 (water).
+        """
+        self.require_temperature("temperature", temperature)
+        return self._ask("GetSatVapPres", temperature) / self.thousand
 
     def saturation_humidity_ratio(self, db: float, pressure: float) -> float:
         """Return the humidity ratio of saturated air, infinite where water boils.

@@ -8,8 +8,15 @@ from __future__ import annotations
 from dataclasses import dataclass
 from typing import TYPE_CHECKING
 
-from schedtui.air.flow import PER_HOUR, PER_THOUSAND, enthalpy_difference, heat_flow, moisture_flow
-from schedtui.air.step import HANDBOOK_LOADS, Number, Step, Steps, enthalpy_step
+from schedtui.air.flow import (
+    PER_HOUR,
+    PER_THOUSAND,
+    TIMES_THOUSAND,
+    enthalpy_difference,
+    heat_flow,
+    moisture_flow,
+)
+from schedtui.air.step import HANDBOOK_LOADS, Number, Step, Steps, dry_bulb_step, enthalpy_step
 from schedtui.units import (
     AIR_MASS_FLOW,
     ENTHALPY,
@@ -21,6 +28,8 @@ from schedtui.units import (
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
+
+_CORNER = "enthalpy at the room's dry bulb and the supply's humidity ratio"
 
 
 @dataclass(frozen=True, slots=True)
@@ -86,16 +95,50 @@ def heat_met(mass: float, supply: State, room_db: float, steps: Steps | None = N
     heat = heat_flow(mass, supply.h - cooled.h, system)
     if steps is not None:
         numbers: tuple[Number, ...] = (
-            ("m", mass, AIR_MASS_FLOW),
+            ("m_s", mass, AIR_MASS_FLOW),
             ("h_s", supply.h, ENTHALPY),
             ("h_r", cooled.h, ENTHALPY),
         )
-        formula = f"q_h = m · (h_s − h_r){PER_THOUSAND[system]}"
+        formula = f"q_h = m_s · (h_s − h_r){PER_THOUSAND[system]}"
         steps.append(Step("q_h", "room heat met", formula, numbers, heat, LOAD, HANDBOOK_LOADS))
     return heat
 
 
-def supply_for(mass: float, room: State, sensible: float, w: float) -> State:
+def supply_moisture(mass: float, room: State, latent: float, steps: Steps | None = None) -> float:
+    """Return the humidity ratio of the supply air that meets a room's latent load [lb/lb | kg/kg].
+
+    Args:
+        mass: dry supply air [lb/h | kg/s].
+        room: room air.
+        latent: latent load to be met [MBH | kW].
+        steps: the working to append to.
+
+    Raises:
+        AirError: no air flows.
+
+    Source: the latent load of `room_met`, solved for the supply humidity ratio.
+    """
+    air = room.air
+    gain = enthalpy_difference(mass, latent, air.system)
+    # Enthalpy is linear in the humidity ratio: its rise from 0 to 1 is the heat of the vapour.
+    w = room.w - gain / (air.enthalpy(room.db, 1.0) - air.enthalpy(room.db, 0.0))
+    if steps is not None:
+        vapour = {"IP": "(1061 + 0.444 · t_r)", "SI": "(2501 + 1.86 · t_r)"}[air.system]
+        numbers: tuple[Number, ...] = (
+            ("W_r", room.w, HUMIDITY_RATIO),
+            ("q_rl", latent, LOAD),
+            ("m", mass, AIR_MASS_FLOW),
+            ("t_r", room.db, TEMPERATURE),
+        )
+        formula = f"W_s = W_r − q_rl{TIMES_THOUSAND[air.system]} / (m · {vapour})"
+        name = "supply humidity ratio that meets the room's latent load"
+        steps.append(Step("W_s", name, formula, numbers, w, HUMIDITY_RATIO, HANDBOOK_LOADS))
+    return w
+
+
+def supply_for(
+    mass: float, room: State, sensible: float, w: float, steps: Steps | None = None
+) -> State:
     """Return the supply air of a given humidity ratio that meets a room's sensible load.
 
     Args:
@@ -103,14 +146,32 @@ def supply_for(mass: float, room: State, sensible: float, w: float) -> State:
         room: room air.
         sensible: sensible load to be met [MBH | kW].
         w: humidity ratio of the supply air [lb/lb | kg/kg].
+        steps: the working to append to.
 
     Raises:
         AirError: no air flows, or the supply air would leave the formulas' range.
 
     Source: the sensible load of `room_met`, solved for the supply dry bulb.
     """
+    system = room.air.system
     warm = room.at(w=w)
-    return room.air.by_enthalpy(warm.h - enthalpy_difference(mass, sensible, room.air.system), w)
+    supply = room.air.by_enthalpy(warm.h - enthalpy_difference(mass, sensible, system), w)
+    if steps is not None:
+        w_s: Number = ("W_s", w, HUMIDITY_RATIO)
+        h_s: Number = ("h_s", supply.h, ENTHALPY)
+        steps.append(
+            enthalpy_step(system, "h_rs", _CORNER, ("t_r", room.db, TEMPERATURE), w_s, warm.h)
+        )
+        numbers: tuple[Number, ...] = (
+            ("h_rs", warm.h, ENTHALPY),
+            ("q_rs", sensible, LOAD),
+            ("m", mass, AIR_MASS_FLOW),
+        )
+        formula = f"h_s = h_rs − q_rs{TIMES_THOUSAND[system]} / m"
+        name = "supply enthalpy that meets the room's sensible load"
+        steps.append(Step("h_s", name, formula, numbers, supply.h, ENTHALPY, HANDBOOK_LOADS))
+        steps.append(dry_bulb_step(system, "t_s", "its dry bulb", h_s, w_s, supply.db))
+    return supply
 
 
 def moisture_to_add(mass: float, dry: State, room: State, steps: Steps | None = None) -> float:
@@ -147,20 +208,20 @@ def _append_met(
     steps.append(
         enthalpy_step(
             system,
-            "h_x",
-            "enthalpy at the room's dry bulb and the supply's humidity ratio",
+            "h_rs",
+            _CORNER,
             ("t_r", room.db, TEMPERATURE),
             ("W_s", supply.w, HUMIDITY_RATIO),
             corner,
         )
     )
-    m: Number = ("m", mass, AIR_MASS_FLOW)
-    h_x: Number = ("h_x", corner, ENTHALPY)
-    numbers: tuple[Number, ...] = (m, h_x, ("h_s", supply.h, ENTHALPY))
-    formula = f"q_s = m · (h_x − h_s){PER_THOUSAND[system]}"
+    m: Number = ("m_s", mass, AIR_MASS_FLOW)
+    h_rs: Number = ("h_rs", corner, ENTHALPY)
+    numbers: tuple[Number, ...] = (m, h_rs, ("h_s", supply.h, ENTHALPY))
+    formula = f"q_rs = m_s · (h_rs − h_s){PER_THOUSAND[system]}"
     name = "room sensible met"
-    steps.append(Step("q_s", name, formula, numbers, met.sensible, LOAD, HANDBOOK_LOADS))
-    numbers = (m, ("h_r", room.h, ENTHALPY), h_x)
-    formula = f"q_l = m · (h_r − h_x){PER_THOUSAND[system]}"
+    steps.append(Step("q_rs", name, formula, numbers, met.sensible, LOAD, HANDBOOK_LOADS))
+    numbers = (m, ("h_r", room.h, ENTHALPY), h_rs)
+    formula = f"q_rl = m_s · (h_r − h_rs){PER_THOUSAND[system]}"
     name = "room latent met"
-    steps.append(Step("q_l", name, formula, numbers, met.latent, LOAD, HANDBOOK_LOADS))
+    steps.append(Step("q_rl", name, formula, numbers, met.latent, LOAD, HANDBOOK_LOADS))

@@ -9,18 +9,14 @@ Knows nothing of coils.
 from __future__ import annotations
 
 from itertools import pairwise
-from typing import TYPE_CHECKING, Final
+from typing import TYPE_CHECKING
 
-from schedtui.air.psychro import TEMPERATURE_RANGE
+from schedtui.air.psychro import TEMPERATURE_RANGE, TRIPLE_POINT
 
 if TYPE_CHECKING:
     from collections.abc import Callable
 
     from schedtui.air.state import State
-    from schedtui.units import System
-
-_BEND: Final[dict[System, float]] = {"IP": 32.018, "SI": 0.01}
-"""The triple point of water [°F | °C]."""
 
 _ON_THE_CURVE = 1e-9  # humidity ratio that a state at saturation may be off by
 _SHARPNESS = 1e-10  # degrees, for a crossing
@@ -46,7 +42,7 @@ def first_crossing(warm: State, cool: State) -> float | None:
         return None if cool.supersaturated else cool.db
     # Where the line holds no moisture any more it cannot meet saturation.
     lowest = max(cool.db - cool.w / slope, TEMPERATURE_RANGE[air.system][0])
-    bend = _BEND[air.system]
+    bend = TRIPLE_POINT[air.system]
     corners = [cool.db, bend, lowest] if lowest < bend < cool.db else [cool.db, lowest]
     for high, low in pairwise(corners):
         beneath = _not_above_zero(gap, low, high)

@@ -10,10 +10,20 @@ from __future__ import annotations
 
 import math
 from dataclasses import dataclass, field
+from typing import TYPE_CHECKING
 
-from schedtui.air import psychro
+from schedtui.air import derivation, psychro
 from schedtui.errors import AirError
-from schedtui.units import HUMIDITY_RATIO, STATION_PRESSURE, System
+from schedtui.units import (
+    ALTITUDE,
+    HUMIDITY_RATIO,
+    STATION_PRESSURE,
+    TEMPERATURE_DIFFERENCE,
+    System,
+)
+
+if TYPE_CHECKING:
+    from schedtui.air.step import Steps
 
 # Air whose wet bulb is all but its dry bulb may come out 1.3e-4 above saturation: the wet-bulb
 # equation over ice (eq. 35, IP) does not quite close there.
@@ -46,17 +56,22 @@ class Air:
             raise AirError(f"station pressure {self.pressure:g} {unit} is not above 0")
 
     @classmethod
-    def at_altitude(cls, system: System, altitude: float) -> Air:
+    def at_altitude(cls, system: System, altitude: float, steps: Steps | None = None) -> Air:
         """Return the air at an altitude in the standard atmosphere.
 
         Args:
             system: the unit system.
             altitude: height above sea level [ft | m].
+            steps: the working to append to.
 
         Raises:
             AirError: the altitude is outside the standard atmosphere's range.
         """
-        return cls(system, psychro.station_pressure(altitude, system))
+        pressure = psychro.station_pressure(altitude, system)
+        if steps is not None:
+            height = ("Z", altitude, ALTITUDE)
+            steps.append(derivation.station_pressure_step(system, height, pressure))
+        return cls(system, pressure)
 
     @property
     def formulas(self) -> psychro.Psychrometrics:
@@ -68,54 +83,72 @@ class Air:
         """Station pressure over the standard atmosphere's (constant-temperature convention)."""
         return self.pressure / psychro.STANDARD_PRESSURE[self.system]
 
-    def by_wet_bulb(self, db: float, wb: float) -> State:
+    def by_wet_bulb(self, db: float, wb: float, steps: Steps | None = None) -> State:
         """Return the state of a dry and a wet bulb.
 
         Args:
             db: dry bulb [°F | °C].
             wb: wet bulb [°F | °C].
+            steps: the working to append to.
 
         Raises:
             AirError: no air has these two.
         """
-        return self._state(db, self.formulas.humidity_ratio_by_wet_bulb(db, wb, self.pressure), wb)
+        w = self.formulas.humidity_ratio_by_wet_bulb(db, wb, self.pressure)
+        state = self._state(db, w, wb)
+        if steps is not None:
+            derivation.by_wet_bulb(steps, state, wb)
+        return state
 
-    def by_dew_point(self, db: float, dp: float) -> State:
+    def by_dew_point(self, db: float, dp: float, steps: Steps | None = None) -> State:
         """Return the state of a dry bulb and a dew point.
 
         Args:
             db: dry bulb [°F | °C].
             dp: dew point [°F | °C].
+            steps: the working to append to.
 
         Raises:
             AirError: no air has these two.
         """
-        return self._state(db, self.formulas.humidity_ratio_by_dew_point(db, dp, self.pressure))
+        w = self.formulas.humidity_ratio_by_dew_point(db, dp, self.pressure)
+        state = self._state(db, w)
+        if steps is not None:
+            derivation.by_dew_point(steps, state, dp)
+        return state
 
-    def by_relative_humidity(self, db: float, rh: float) -> State:
+    def by_relative_humidity(self, db: float, rh: float, steps: Steps | None = None) -> State:
         """Return the state of a dry bulb and a relative humidity.
 
         Args:
             db: dry bulb [°F | °C].
             rh: relative humidity [%].
+            steps: the working to append to.
 
         Raises:
             AirError: no air has these two.
         """
         w = self.formulas.humidity_ratio_by_relative_humidity(db, rh, self.pressure)
-        return self._state(db, w)
+        state = self._state(db, w)
+        if steps is not None:
+            derivation.by_relative_humidity(steps, state, rh)
+        return state
 
-    def by_humidity_ratio(self, db: float, w: float) -> State:
+    def by_humidity_ratio(self, db: float, w: float, steps: Steps | None = None) -> State:
         """Return the state of a dry bulb and a humidity ratio, foggy if above saturation.
 
         Args:
             db: dry bulb [°F | °C].
             w: humidity ratio [lb/lb | kg/kg].
+            steps: the working to append to.
 
         Raises:
             AirError: the humidity ratio is below zero or the dry bulb out of range.
         """
-        return self._state(db, w)
+        state = self._state(db, w)
+        if steps is not None:
+            derivation.enthalpy(steps, state)
+        return state
 
     def by_enthalpy(self, h: float, w: float) -> State:
         """Return the state of an enthalpy and a humidity ratio, foggy if above saturation.
@@ -218,7 +251,18 @@ class State:
     @property
     def v(self) -> float:
         """Specific volume [ft³/lb | m³/kg of dry air]."""
-        return self.air.formulas.volume(self.db, self.w, self.air.pressure)
+        return self.specific_volume()
+
+    def specific_volume(self, steps: Steps | None = None) -> float:
+        """Return the specific volume [ft³/lb | m³/kg of dry air].
+
+        Args:
+            steps: the working to append to.
+        """
+        v = self.air.formulas.volume(self.db, self.w, self.air.pressure)
+        if steps is not None:
+            derivation.volume(steps, self, v)
+        return v
 
     @property
     def supersaturated(self) -> bool:
@@ -226,16 +270,40 @@ class State:
         limit = self.air.saturation_humidity_ratio(self.db)
         return self.w > limit * (1 + _SATURATION_TOLERANCE)
 
-    def heated_to(self, db: float) -> State:
+    def heated_to(self, db: float, steps: Steps | None = None) -> State:
         """Return this air heated or cooled at constant humidity ratio.
 
         Args:
             db: dry bulb afterwards [°F | °C].
+            steps: the working to append to; the air before has the subscript i.
 
         Raises:
             AirError: the dry bulb is out of range.
         """
-        return self.at(db=db)
+        after = self.at(db=db)
+        if steps is not None:
+            derivation.same_moisture(steps, after.w)
+            derivation.enthalpy(steps, after)
+        return after
+
+    def warmed_by(self, difference: float, where: str, steps: Steps | None = None) -> State:
+        """Return this air warmed or cooled by so much at constant humidity ratio.
+
+        Args:
+            difference: what its dry bulb rises by, below 0 where it falls [°F | K].
+            where: where the air is afterwards, in words for the working.
+            steps: the working to append to; the air before has the subscript i, the rise d.
+
+        Raises:
+            AirError: the dry bulb is out of range.
+        """
+        if difference == 0:
+            return self
+        after = self.at(db=self.db + difference)
+        if steps is not None:
+            rise = ("Δt_d", difference, TEMPERATURE_DIFFERENCE)
+            derivation.warmed(steps, self, after, rise, where)
+        return after
 
     def at(self, *, db: float | None = None, w: float | None = None) -> State:
         """Return this air at another dry bulb, another humidity ratio, or both.

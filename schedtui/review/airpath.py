@@ -6,18 +6,23 @@ give it. Judges nothing.
 
 from __future__ import annotations
 
-from typing import TYPE_CHECKING, Self, cast
+from typing import TYPE_CHECKING, Any, Self, cast
 
 from schedtui.air import fan
-from schedtui.air.flow import AirflowBasis, dry_air_mass, volume_flow
+from schedtui.air.derivation import same_moisture
+from schedtui.air.flow import AirflowBasis, dry_air_mass
+from schedtui.air.step import DEFINITION, Step, Steps
 from schedtui.errors import Absent
 from schedtui.review.figure import figure
+from schedtui.review.letters import Letters, Names
 from schedtui.schedule.catalogue.condition import HUMIDITIES, Condition
 from schedtui.schedule.catalogue.unit import Unit
+from schedtui.units import AIR_MASS_FLOW, RATIO
 
 if TYPE_CHECKING:
+    from collections.abc import Callable
+
     from schedtui.air.state import State
-    from schedtui.air.step import Steps
     from schedtui.review.site import Site
     from schedtui.schedule.catalogue.field import Field
 
@@ -60,10 +65,32 @@ class AirPath:
         """Return another unit, or another reading of this one, at the same condition."""
         return type(self)(unit, self.condition, self.site)
 
+    @property
+    def letters(self) -> Letters:
+        """The letters of the streams, for a working."""
+        return Letters()
+
+    def lettered(self, bare: str = "", **subscripts: str) -> Steps | None:
+        """Return a place for steps with letters for their streams; None where nobody collects any.
+
+        Args:
+            bare: the letter of a property that has no subscript.
+            subscripts: what the others become.
+        """
+        return None if self.steps is None else self.steps.named(bare, subscripts)
+
+    def named(self, names: Callable[[Any], Names]) -> Steps | None:
+        """Return the same with letters that hang on the unit, and are asked for only if needed.
+
+        Args:
+            names: gives them; a method of this path's letters.
+        """
+        return None if self.steps is None else self.steps.named(*names(self.letters))
+
     @figure
     def outdoor(self) -> State:
         """Outdoor air of the condition."""
-        return outdoor_air(self.condition, self.site)
+        return outdoor_air(self.condition, self.site, self.lettered("o"))
 
     @property
     def fan_inlet(self) -> State:
@@ -92,7 +119,7 @@ class AirPath:
         if self._tried_mass is not None:
             return self._tried_mass
         volume = self._settled_inlet_volume() if self.basis == "actual" else None
-        return self.mass_of(self.supply_airflow, volume)
+        return self.mass_of(self.supply_airflow, volume, self.named(Letters.supply_mass))
 
     @figure
     def outdoor_mass(self) -> float:
@@ -103,24 +130,46 @@ class AirPath:
             return 0.0
         # Outdoor air equal to supply air as typed means all of it, whatever the volumes weigh;
         # above that the share is held at 1, since nothing is extrapolated.
-        if airflow >= self.supply_airflow:
-            return self.supply_mass
-        volume = self.outdoor.v if self.basis == "actual" else None
-        return min(self.mass_of(airflow, volume), self.supply_mass)
+        mass = self.supply_mass
+        if airflow < self.supply_airflow:
+            names, volume = self.lettered("o", a="o"), None
+            if self.basis == "actual":
+                volume = self.outdoor.specific_volume(names)
+            mass = self.mass_of(airflow, volume, names)
+        if mass >= self.supply_mass:
+            self._append_all_outdoor()
+        return min(mass, self.supply_mass)
+
+    def _append_all_outdoor(self) -> None:
+        """Say in a working that all of the supply air is outdoor air."""
+        if self.steps is not None:
+            numbers = (("m_s", self.supply_mass, AIR_MASS_FLOW),)
+            name = "outdoor air: all of the supply air"
+            mass, of = self.supply_mass, AIR_MASS_FLOW
+            self.steps.append(Step("m_o", name, "m_o = m_s", numbers, mass, of, DEFINITION))
 
     @figure
     def outdoor_fraction(self) -> float:
         """Share of outdoor air in the supply, by mass."""
-        return self.outdoor_mass / self.supply_mass
+        share = self.outdoor_mass / self.supply_mass
+        if self.steps is not None and share:
+            numbers = (
+                ("m_o", self.outdoor_mass, AIR_MASS_FLOW),
+                ("m_s", self.supply_mass, AIR_MASS_FLOW),
+            )
+            name, formula = "outdoor share, by mass", "x_o = m_o / m_s"
+            self.steps.append(Step("x_o", name, formula, numbers, share, RATIO, DEFINITION))
+        return share
 
-    def mass_of(self, airflow: float, volume: float | None) -> float:
+    def mass_of(self, airflow: float, volume: float | None, steps: Steps | None = None) -> float:
         """Return the dry air in a volume flow [lb/h | kg/s].
 
         Args:
             airflow: as scheduled [cfm | L/s].
             volume: specific volume where it is taken [ft³/lb | m³/kg], for the actual basis.
+            steps: the working to append to.
         """
-        return dry_air_mass(airflow, self.basis, self.site.air, volume, self.steps)
+        return dry_air_mass(airflow, self.basis, self.site.air, volume, steps)
 
     def _settled_inlet_volume(self) -> float:
         """Return the specific volume at the supply fan's inlet [ft³/lb | m³/kg].
@@ -150,12 +199,19 @@ class AirPath:
     @figure
     def fan_heat(self) -> float:
         """Heat that the supply fan puts into the air [MBH | kW]; 0 where nothing gives it."""
-        return self.fan_heat_at(self.fan_inlet, self.steps)
+        return self.fan_heat_at(self.fan_inlet, self.named(Letters.fan))
 
     @figure
     def fan_rise(self) -> float:
         """Warming of the air by the supply fan [°F | K]."""
-        return fan.rise(self.fan_inlet, self.supply_mass, self.fan_heat, self.steps)
+        # A stated rise needs no step.
+        steps = None if self.unit.fan_rise is not None else self.named(Letters.fan)
+        return fan.rise(self.fan_inlet, self.supply_mass, self.fan_heat, steps)
+
+    @figure
+    def fan_inlet_volume(self) -> float:
+        """Specific volume at the supply fan's inlet [ft³/lb | m³/kg]."""
+        return self.fan_inlet.specific_volume(self.named(Letters.fan_volume))
 
     def fan_heat_at(self, inlet: State, steps: Steps | None = None) -> float:
         """Return the fan's heat for a state at its inlet [MBH | kW]."""
@@ -177,10 +233,10 @@ class AirPath:
         unit = self.unit
         if unit.fan_power is not None:
             unit.refuse_bad(Unit.fan_count)
-            return unit.fan_power * unit.fan_count
+            return fan.power_of_all(unit.fan_power, unit.fan_count, steps)
         if unit.fan_total_pressure is None or unit.fan_efficiency is None:
             return None
-        airflow = volume_flow(self.supply_mass, "actual", self.site.air, inlet.v)
+        airflow = fan.inlet_airflow(inlet, self.supply_mass, steps)
         pressure, efficiency = unit.fan_total_pressure, unit.fan_efficiency
         return fan.shaft_power(airflow, pressure, efficiency, self.site.system, steps)
 
@@ -191,8 +247,23 @@ class AirPath:
             rise = fan.rise(inlet, self.supply_mass, self.fan_heat_at(inlet))
             before, inlet = inlet, after.heated_to(after.db - rise)
             if abs(inlet.v - before.v) <= _SETTLED * before.v:
+                if self.steps is not None:
+                    self._append_back_over_fan(after, inlet)
                 return inlet
         raise Absent(why="the air in front of the supply fan does not settle")
+
+    def _append_back_over_fan(self, after: State, inlet: State) -> None:
+        """Append the settled turn of going back over the fan: what comes out went into it."""
+        back = self.named(Letters.back_over_fan)
+        if self.unit.fan_rise is not None:
+            after.warmed_by(-self.unit.fan_rise, "in front of the fan", back)
+            return
+        if back is not None and inlet is not after:
+            same_moisture(back, after.w)
+        steps = self.named(Letters.fan_of_aim)
+        heat = self.fan_heat_at(inlet, steps)
+        rise = fan.rise(inlet, self.supply_mass, heat, steps)
+        after.warmed_by(-rise, "in front of the fan", back)
 
 
 def humid_air(
@@ -201,6 +272,7 @@ def humid_air(
     db: Field[float | None],
     rh: Field[float | None],
     wb: Field[float | None],
+    steps: Steps | None = None,
 ) -> State:
     """Return the state of a unit's dry bulb with either its relative humidity or its wet bulb.
 
@@ -212,11 +284,11 @@ def humid_air(
     if unit.stated(rh.key, wb.key):
         raise Absent(rh.key, wb.key, why=f"{rh.key} and {wb.key} are both stated")
     if unit.stated(wb.key):
-        return site.air.by_wet_bulb(dry_bulb, unit.need(wb))
-    return site.air.by_relative_humidity(dry_bulb, unit.need(rh))
+        return site.air.by_wet_bulb(dry_bulb, unit.need(wb), steps)
+    return site.air.by_relative_humidity(dry_bulb, unit.need(rh), steps)
 
 
-def outdoor_air(condition: Condition, site: Site) -> State:
+def outdoor_air(condition: Condition, site: Site, steps: Steps | None = None) -> State:
     """Return the outdoor air of a condition.
 
     Raises:
@@ -229,9 +301,9 @@ def outdoor_air(condition: Condition, site: Site) -> State:
         raise Absent(*HUMIDITIES, why=f"condition {name} does not state one outdoor humidity")
     dry_bulb = condition.need(Condition.outdoor_db)
     if stated == ["outdoor_wb"]:
-        return site.air.by_wet_bulb(dry_bulb, condition.need(Condition.outdoor_wb))
+        return site.air.by_wet_bulb(dry_bulb, condition.need(Condition.outdoor_wb), steps)
     if stated == ["outdoor_dp"]:
-        return site.air.by_dew_point(dry_bulb, condition.need(Condition.outdoor_dp))
+        return site.air.by_dew_point(dry_bulb, condition.need(Condition.outdoor_dp), steps)
     if stated == ["outdoor_rh"]:
-        return site.air.by_relative_humidity(dry_bulb, condition.need(Condition.outdoor_rh))
-    return site.air.by_humidity_ratio(dry_bulb, condition.need(Condition.outdoor_w))
+        return site.air.by_relative_humidity(dry_bulb, condition.need(Condition.outdoor_rh), steps)
+    return site.air.by_humidity_ratio(dry_bulb, condition.need(Condition.outdoor_w), steps)

@@ -1,0 +1,288 @@
+"""The pages of a working: each step with its formula, the numbers put in, the result, the source.
+
+A result is printed with a few digits more than a schedule has; a number that is put into a formula
+with more again, so that a pocket calculator comes to the printed result from the printed numbers.
+"""
+
+from __future__ import annotations
+
+import math
+from typing import TYPE_CHECKING, Final
+
+from schedtui.air.derivation import ABSOLUTE_TEMPERATURE
+from schedtui.air.step import OF_A_STREAM, SYMBOL
+from schedtui.report.page import (
+    CAUTION,
+    Block,
+    Calculations,
+    Entries,
+    Entry,
+    Heading,
+    Page,
+    Paragraph,
+    Table,
+)
+from schedtui.review.cooling import Cooling
+from schedtui.review.figure import known
+from schedtui.review.letters import MEANINGS
+from schedtui.review.working import Stage, Working, site_stage, without_repeats, working
+from schedtui.units import (
+    AIR_MASS_FLOW,
+    AIR_PRESSURE,
+    AIRFLOW,
+    ENTHALPY,
+    HUMIDITY_RATIO,
+    LOAD,
+    MOISTURE_FLOW,
+    PERCENT,
+    RATIO,
+    REFRIGERATION,
+    SHAFT_POWER,
+    SPECIFIC_VOLUME,
+    STATION_PRESSURE,
+    TEMPERATURE,
+    TEMPERATURE_DIFFERENCE,
+    Quantity,
+    System,
+    format_number,
+)
+
+if TYPE_CHECKING:
+    from collections.abc import Iterator, Sequence
+
+    from schedtui.air.step import Number, Step
+    from schedtui.review.airpath import AirPath
+    from schedtui.review.case import UnitCase
+    from schedtui.review.reviewed import UnitReview
+
+# Decimals of a printed result, IP and SI. Every one of them comes out again of the numbers put in.
+_DIGITS: Final[dict[Quantity, tuple[int, int]]] = {
+    TEMPERATURE: (3, 3),
+    TEMPERATURE_DIFFERENCE: (3, 3),
+    ABSOLUTE_TEMPERATURE: (3, 3),
+    HUMIDITY_RATIO: (6, 6),
+    ENTHALPY: (3, 3),
+    SPECIFIC_VOLUME: (4, 5),
+    STATION_PRESSURE: (5, 4),
+    AIRFLOW: (1, 1),
+    AIR_MASS_FLOW: (1, 4),
+    LOAD: (2, 3),
+    MOISTURE_FLOW: (2, 2),
+    REFRIGERATION: (3, 3),
+    SHAFT_POWER: (3, 3),
+    AIR_PRESSURE: (3, 1),
+    RATIO: (4, 4),
+    PERCENT: (2, 2),
+}
+_MORE = 3  # decimals that a number put in has beyond those of a result
+_SIGNIFICANT = 8  # figures that it has at least, where it is small
+
+_HOW: Final = (
+    "Below each result stand the formula and the numbers put in, which carry more digits than the "
+    "results do: with them a calculator comes to the result printed. Numbers in brackets name the "
+    "sources at the end."
+)
+
+
+def unit_working_page(reviewed: UnitReview) -> Page:
+    """Return the working of a unit at every condition, the governing one first."""
+    case = reviewed.case
+    governing = known(lambda: case.governing)
+    ordered = sorted(case.evaluations, key=lambda at: at is not governing)
+    return Page((*_unit_blocks(reviewed, ordered), Paragraph(CAUTION)))
+
+
+def working_page(units: Sequence[UnitReview], condition: str | None, title: str) -> Page:
+    """Return the working of units at a condition, or at all of theirs in the file's order.
+
+    Args:
+        units: the units' reviews.
+        condition: name of the condition; None for all.
+        title: the page's heading.
+    """
+    blocks: list[Block] = [Heading(title, 1)]
+    for reviewed in units:
+        evaluations = [
+            at for at in reviewed.case.evaluations if condition is None or at.name == condition
+        ]
+        blocks += _unit_blocks(reviewed, evaluations)
+    return Page((*blocks, Paragraph(CAUTION)))
+
+
+def _unit_blocks(reviewed: UnitReview, evaluations: Sequence[AirPath]) -> Iterator[Block]:
+    """Yield a unit's working at some of its conditions, with its symbols and sources."""
+    case = reviewed.case
+    system = case.site.system
+    sources: dict[str, int] = {}
+    yield Heading(f"{reviewed.label}: working", 2)
+    if not evaluations:
+        yield Paragraph("No condition applies.")
+        return
+    yield Paragraph(_HOW)
+    site = site_stage(case)
+    yield from _stage(site, system, sources)
+    cooling = [at for at in evaluations if isinstance(at, Cooling)]
+    workings = without_repeats([working(at) for at in cooling])
+    by_evaluation = dict(zip(map(id, cooling), workings, strict=True))
+    for at in evaluations:
+        yield Heading(f"{reviewed.label} at {at.name}{_role(case, at)}", 2)
+        found = by_evaluation.get(id(at))
+        if found is None:
+            yield Paragraph(
+                "A heating condition: its loads are computed and checked, but their working is not "
+                "printed yet."
+            )
+        else:
+            yield from _condition(found, case, system, sources)
+    steps = [step for one in (site, *(s for w in workings for s in w.stages)) for step in one.steps]
+    yield from _legend(steps, system)
+    yield from _sources(sources)
+
+
+def _role(case: UnitCase, at: AirPath) -> str:
+    roles = (("governing", lambda: case.governing), ("rated", lambda: case.rated))
+    said = [word for word, ask in roles if known(ask) is at]
+    return f" ({' and '.join(said)})" if said else ""
+
+
+def _condition(
+    found: Working, case: UnitCase, system: System, sources: dict[str, int]
+) -> Iterator[Block]:
+    for stage in found.stages:
+        yield from _stage(stage, system, sources)
+    if not found.outcomes:
+        return
+    yield Heading("Required and provided", 3)
+    rows = tuple(
+        (
+            one.label,
+            _or_dash(one.required, one.quantity.digits(system)),
+            _or_dash(one.provided, one.quantity.digits(system)),
+            one.quantity.unit(system),
+            _or_dash(one.margin, 1),
+        )
+        for one in found.outcomes
+    )
+    yield Table(("Figure", "Required", "Provided", "Unit", "Margin %"), rows, frozenset({1, 2, 4}))
+    rated = known(lambda: case.rated)
+    if rated is not None and rated.name != found.condition:
+        yield Paragraph(f"Sensible capacity is judged at the rated condition, {rated.name}.")
+
+
+def _stage(stage: Stage, system: System, sources: dict[str, int]) -> Iterator[Block]:
+    yield Heading(stage.title, 3)
+    for text in stage.words:
+        yield Paragraph(text)
+    if stage.given:
+        numbers = ", ".join(
+            f"{symbol} = {put_in(value, of, system)} {of.unit(system)}".rstrip()
+            for symbol, value, of in stage.given
+        )
+        same = f"The same as: {stage.same_as.lower()}. " if stage.same_as else ""
+        yield Paragraph(f"{same}{numbers}")
+    if stage.steps:
+        yield Calculations(tuple(_entry(step, system, sources) for step in stage.steps))
+
+
+def _entry(step: Step, system: System, sources: dict[str, int]) -> Entry:
+    """Return a step: its result and name, the formula, the numbers in the symbols' places."""
+    note = sources.setdefault(step.source, len(sources) + 1)
+    value = result(step.result, step.quantity, system)
+    amount = f"{value} {step.quantity.unit(system)}".rstrip()
+    head = f"{amount}   {step.name} [{note}]"
+    _, _, right = step.formula.partition(" = ")
+    lines = [f"= {right}" if step.numbers else step.formula]
+    if step.numbers:
+        lines.append(f"= {_filled(right, step.numbers, system)}")
+    return Entry(step.symbol, head, tuple(lines))
+
+
+def _filled(formula: str, numbers: tuple[Number, ...], system: System) -> str:
+    """Return a formula with its numbers in the place of their symbols."""
+    texts = {symbol: put_in(value, quantity, system) for symbol, value, quantity in numbers}
+    in_brackets = {
+        symbol: f"({text})" if text.startswith("−") else text for symbol, text in texts.items()
+    }
+    return SYMBOL.sub(lambda match: in_brackets.get(match[0], match[0]), formula)
+
+
+def result(value: float, quantity: Quantity, system: System) -> str:
+    """Return a result as printed.
+
+    >>> result(31.44836, ENTHALPY, "IP")
+    '31.448'
+    """
+    return _signed(format_number(value, _decimals(quantity, system)))
+
+
+def put_in(value: float, quantity: Quantity, system: System) -> str:
+    """Return a number that goes into a formula, without the zeros that say nothing.
+
+    >>> put_in(31.448361234, ENTHALPY, "IP"), put_in(9440.0, AIRFLOW, "IP")
+    ('31.448361', '9440')
+    """
+    places = _decimals(quantity, system) + _MORE
+    if value:
+        places = max(places, _SIGNIFICANT - 1 - math.floor(math.log10(abs(value))))
+    text = format_number(value, places)
+    return _signed(text.rstrip("0").rstrip(".") if "." in text else text)
+
+
+def _decimals(quantity: Quantity, system: System) -> int:
+    ip, si = _DIGITS.get(quantity, (quantity.digits_ip, quantity.digits_si))
+    return ip if system == "IP" else si
+
+
+def _signed(text: str) -> str:
+    return text.replace("-", "−")
+
+
+def _or_dash(value: float | None, digits: int) -> str:
+    return "-" if value is None else _signed(format_number(value, digits))
+
+
+def _legend(steps: Sequence[Step], system: System) -> Iterator[Block]:
+    """Yield what the symbols and subscripts of some steps mean."""
+    letters: dict[str, tuple[str, str]] = {}
+    subscripts: set[str] = set()
+    for step in steps:
+        for symbol, _, quantity in ((step.symbol, 0.0, step.quantity), *step.numbers):
+            letter, _, subscript = symbol.partition("_")
+            name = _LETTERS.get(letter, quantity.name)
+            if symbol != "m_w":  # condensate: a flow of water by another unit
+                letters.setdefault(letter, (name, quantity.unit(system)))
+            if letter in OF_A_STREAM and symbol != "m_w":
+                subscripts.add(subscript)
+    if not letters:
+        return
+    yield Heading("Symbols", 3)
+    yield Table(
+        ("Symbol", "What it is", "Unit"),
+        tuple((letter, name, unit) for letter, (name, unit) in sorted(letters.items())),
+    )
+    meant = ", ".join(f"{one} {MEANINGS[one]}" for one in MEANINGS if one in subscripts)
+    yield Paragraph(f"Subscripts: {meant}.")
+
+
+_LETTERS: Final = {
+    "t": "dry bulb",
+    "wb": "wet bulb",
+    "dp": "dew point",
+    "RH": "relative humidity",
+    "q": "heat, load",
+    "p": "pressure",
+    "x": "share",
+    "ε": "effectiveness",
+    "η": "efficiency",
+    "m": "mass flow of dry air; m_w the condensate",
+    "B": "bypass, as stated",
+    "L": "part of the design load",
+    "SHR": "sensible heat ratio",
+    "BF": "bypass factor",
+}
+
+
+def _sources(sources: dict[str, int]) -> Iterator[Block]:
+    if sources:
+        yield Heading("Sources", 3)
+        yield Entries(tuple(Entry(f"[{number}]", source) for source, number in sources.items()))
