@@ -74,6 +74,20 @@ def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
     return in_order(found)
 
 
+def still_found(name: str, case: UnitCase) -> bool:
+    """Tell whether a check finds anything in a unit, within the printed digits or not.
+
+    What can no longer be judged counts as found.
+    """
+    for asking in _askings(registered()[name], case):
+        try:
+            if any(True for _ in asking.now()):
+                return True
+        except (Absent, StateError):
+            return True
+    return False
+
+
 def judge_condition(case: ConditionCase) -> tuple[Finding, ...]:
     """Return the findings of a condition by itself, worst first."""
     row = case.condition

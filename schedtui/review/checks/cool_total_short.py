@@ -21,7 +21,7 @@ from schedtui.units import LOAD
 if TYPE_CHECKING:
     from schedtui.review.cooling import Cooling
 
-_MOST_OF = 0.6  # so much of the fan's heat lacking, the rest being margin, looks like a net capacity
+_MOST_OF = 0.6  # so much of the fan's heat lacking looks like a net capacity
 
 
 def find(at: Cooling) -> Faults:
