@@ -17,13 +17,17 @@ from schedtui.report.page import (
 from schedtui.review.figure import known
 from schedtui.review.finding import WORST_FIRST, Finding, Measure, Severity
 from schedtui.review.quantities import COLUMNS
+from schedtui.review.remedy import plant_remedies, remedies_by_check
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import ALTITUDE, LOAD, STATION_PRESSURE, format_number
 
 if TYPE_CHECKING:
     from collections.abc import Callable, Iterable, Iterator
 
+    from schedtui.review.remedy import Remedy
     from schedtui.review.reviewed import Review, UnitReview
+
+    Cures = Callable[[Finding], tuple[Remedy, ...] | None]
 
 # Computed columns of the summary, with headings short enough for 80 columns.
 _IN_SUMMARY = {
@@ -52,7 +56,8 @@ def findings_page(review: Review, file: str) -> Page:
         found = [one for one in review.all_findings if one.severity == severity]
         if found:
             blocks.append(Heading(f"{severity.word.capitalize()} ({len(found)})"))
-            blocks.append(finding_entries(found, lambda one: one.subject.label))
+            cures = _cures(review) if severity is Severity.SHORT else _no_cures
+            blocks.append(finding_entries(found, lambda one: one.subject.label, cures))
     if review.units:
         load = LOAD.unit(review.schedule.system)
         blocks += [
@@ -116,12 +121,47 @@ def _sizes(review: Review) -> str:
     return f"{units}, {_number(len(review.schedule.conditions), 'condition')}"
 
 
-def finding_entries(findings: Iterable[Finding], label: Callable[[Finding], str]) -> Entries:
+def _no_cures(finding: Finding) -> None:  # noqa: ARG001  a finding that is not short has none
+    return None
+
+
+def _cures(review: Review) -> Cures:
+    """Return what tells the remedies of a short finding, of a unit or of a plant."""
+    plants = {one.case.plant.row_id: one for one in review.plants}
+
+    def cures(finding: Finding) -> tuple[Remedy, ...]:
+        row_id = finding.subject.row_id
+        if finding.subject.table == "plant":
+            return plant_remedies(plants[row_id], finding)
+        return remedies_by_check(review.units[row_id]).get(finding.check, ())
+
+    return cures
+
+
+def remedy_lines(finding: Finding, cures: tuple[Remedy, ...] | None) -> tuple[str, ...]:
+    """Say what would clear a finding, a line each."""
+    if cures is None or finding.severity is not Severity.SHORT:
+        return ()
+    if not cures:
+        return ("No one number clears this, nor two together.",)
+    return tuple(map(_remedy_line, cures))
+
+
+def _remedy_line(remedy: Remedy) -> str:
+    changes = " with ".join(f"{one.field} {one.text} {one.unit}" for one in remedy.changes)
+    after = f"; then {', '.join(remedy.worsens)}" if remedy.worsens else ""
+    return f"Cleared by {changes}{after}."
+
+
+def finding_entries(
+    findings: Iterable[Finding], label: Callable[[Finding], str], cures: Cures = _no_cures
+) -> Entries:
     """Return findings as a list; what could not be judged for one and the same reason is one entry.
 
     Args:
         findings: the findings, in the order they are read.
         label: what stands before each: what it is about, or how bad it is.
+        cures: tells the remedies of a short finding.
     """
     entries: dict[tuple[str, str, str], Entry] = {}
     for place, finding in enumerate(findings):
@@ -129,7 +169,8 @@ def finding_entries(findings: Iterable[Finding], label: Callable[[Finding], str]
         alike = (label(finding), finding.message, apart)
         before = entries.get(alike)
         head = f"{before.head}, {finding.check}" if before else _head(finding)
-        entries[alike] = Entry(label(finding), head, (finding.message,))
+        lines = (finding.message, *remedy_lines(finding, cures(finding)))
+        entries[alike] = Entry(label(finding), head, lines)
     return Entries(tuple(entries.values()))
 
 

@@ -7,7 +7,8 @@ from typing import TYPE_CHECKING, Any, TypeVar
 from schedtui.report.page import CAUTION
 from schedtui.review.cooling import Cooling
 from schedtui.review.figure import known
-from schedtui.review.finding import margin
+from schedtui.review.finding import Severity, margin
+from schedtui.review.part_load import PartLoad
 from schedtui.review.quantities import (
     COOLING_FIGURES,
     COOLING_STATES,
@@ -15,6 +16,7 @@ from schedtui.review.quantities import (
     HEATING_STATES,
     UNIT_FIGURES,
 )
+from schedtui.review.remedy import plant_remedies, remedies_by_check
 from schedtui.schedule.load import FORMAT
 
 if TYPE_CHECKING:
@@ -22,6 +24,7 @@ if TYPE_CHECKING:
     from schedtui.review.finding import Finding
     from schedtui.review.heating import Heating
     from schedtui.review.quantities import Figure
+    from schedtui.review.remedy import Remedy
     from schedtui.review.reviewed import PlantReview, Review, UnitReview
 
 T = TypeVar("T")
@@ -73,7 +76,8 @@ def _unit(reviewed: UnitReview) -> dict[str, Any]:
         for at in case.evaluations
     }
     made |= _figures(case, UNIT_FIGURES)
-    made["findings"] = [_finding(one) for one in reviewed.findings]
+    cures = remedies_by_check(reviewed)
+    made["findings"] = [_finding(one, cures.get(one.check)) for one in reviewed.findings]
     return made
 
 
@@ -89,7 +93,10 @@ def _plant(reviewed: PlantReview) -> dict[str, Any]:
         "flow_margin": _margin(case.plant.flow, flow),
     }
     made |= {key: value for key, value in between.items() if value is not None}
-    made["findings"] = [_finding(one) for one in reviewed.findings]
+    made["findings"] = [
+        _finding(one, plant_remedies(reviewed, one) if one.severity is Severity.SHORT else None)
+        for one in reviewed.findings
+    ]
     return made
 
 
@@ -98,7 +105,9 @@ def _margin(scheduled: float | None, required: float | None) -> float | None:
 
 
 def _cooling(at: Cooling) -> dict[str, Any]:
-    return {"season": "cooling", **_states(at, COOLING_STATES), **_figures(at, COOLING_FIGURES)}
+    guessed = {"estimate": True} if isinstance(at, PartLoad) and at.estimated else {}
+    states, figures = _states(at, COOLING_STATES), _figures(at, COOLING_FIGURES)
+    return {"season": "cooling", **guessed, **states, **figures}
 
 
 def _heating(at: Heating) -> dict[str, Any]:
@@ -124,7 +133,7 @@ def state_object(state: State) -> dict[str, float]:
     }
 
 
-def _finding(finding: Finding) -> dict[str, Any]:
+def _finding(finding: Finding, cures: tuple[Remedy, ...] | None = None) -> dict[str, Any]:
     made: dict[str, Any] = {"check": finding.check, "severity": finding.severity.word}
     if finding.condition is not None:
         made["condition"] = finding.condition
@@ -139,4 +148,16 @@ def _finding(finding: Finding) -> dict[str, Any]:
     made["accepted"] = finding.accepted
     if finding.rounding:
         made["rounding"] = True
+    if cures is not None and finding.severity is Severity.SHORT:
+        made["remedies"] = [_remedy(finding, one) for one in cures]
     return made
+
+
+def _remedy(finding: Finding, remedy: Remedy) -> dict[str, Any]:
+    """Return a remedy: its last change, with the others that go along, if any."""
+    *others, change = [
+        {"field": finding.subject.path(one.field), "value": one.value, "unit": one.unit}
+        for one in remedy.changes
+    ]
+    along = {"with": others} if others else {}
+    return {**change, **along, "worsens": list(remedy.worsens)}

@@ -16,6 +16,7 @@ from schedtui.review.quantities import (
     HEATING_FIGURES,
     HEATING_STATES,
 )
+from schedtui.review.remedy import remedies_by_check
 from schedtui.units import (
     ENTHALPY,
     HUMIDITY_RATIO,
@@ -54,7 +55,12 @@ def unit_findings_page(reviewed: UnitReview) -> Page:
            if cell.bad]  # fmt: skip
     blocks: list[Block] = [heading, *(Paragraph(text) for text in bad)]
     if reviewed.findings:
-        blocks.append(finding_entries(reviewed.findings, lambda one: one.severity.word))
+        cures = remedies_by_check(reviewed)
+        blocks.append(
+            finding_entries(
+                reviewed.findings, lambda one: one.severity.word, lambda one: cures.get(one.check)
+            )
+        )
     elif not bad:
         blocks.append(Paragraph("Nothing found."))
     return Page(tuple(blocks))

@@ -12,6 +12,7 @@ from schedtui.review.cooling import Cooling
 from schedtui.review.face import velocity
 from schedtui.review.figure import figure, known
 from schedtui.review.heating import Heating
+from schedtui.review.part_load import cooling_at
 from schedtui.review.row import RowCoil
 from schedtui.review.row_heat import RowHeat
 from schedtui.schedule.catalogue.condition import Condition
@@ -69,7 +70,9 @@ class UnitCase:
     def evaluations(self) -> tuple[Cooling | Heating, ...]:
         """The unit at each condition that applies, in file order."""
         return tuple(
-            (Cooling if one.season == "cooling" else Heating)(self.unit, one, self.site)
+            cooling_at(self.unit, one, self.site)
+            if one.season == "cooling"
+            else Heating(self.unit, one, self.site)
             for one in self.conditions
         )
 

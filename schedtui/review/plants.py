@@ -83,6 +83,12 @@ class PlantCase:
         self.site = site
         self._units = units
 
+    def of(self, plant: Plant) -> PlantCase:
+        """Return another reading of the plant with what this one feeds."""
+        other = PlantCase(plant, self.schedule, self.site, self._units)
+        other.__dict__["_known"] = {"feeds": self.feeds}
+        return other
+
     @property
     def name(self) -> str:
         """The plant's name."""

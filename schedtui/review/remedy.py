@@ -9,13 +9,16 @@ single one does.
 from __future__ import annotations
 
 from dataclasses import dataclass
+from functools import lru_cache
 from typing import TYPE_CHECKING
 
 from schedtui.review.case import UnitCase
 from schedtui.review.finding import Severity
 from schedtui.review.judge import judge_unit, still_found
 from schedtui.review.moves import GUARDED, MOVES, PAIRS, UP
+from schedtui.review.registry import registered
 from schedtui.schedule.catalogue.kinds import NumberKind
+from schedtui.schedule.catalogue.plant import Plant
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import decimals, format_number
 
@@ -23,7 +26,7 @@ if TYPE_CHECKING:
     from collections.abc import Callable, Iterable, Mapping
 
     from schedtui.review.finding import Finding
-    from schedtui.review.reviewed import UnitReview
+    from schedtui.review.reviewed import PlantReview, UnitReview
     from schedtui.schedule.catalogue.field import Field
 
 _MOST_STEPS = 2_000_000  # further than any schedule's number could sensibly be moved
@@ -60,6 +63,36 @@ class Remedy:
 
     changes: tuple[Change, ...]
     worsens: tuple[str, ...]
+
+
+@lru_cache(maxsize=256)  # asked again at each step of the cursor
+def remedies_by_check(reviewed: UnitReview) -> dict[str, tuple[Remedy, ...]]:
+    """Return what would clear each of a unit's short findings, once for each check.
+
+    A remedy clears a check's finding at every condition.
+    """
+    short = {one.check: one for one in reversed(reviewed.own) if one.severity is Severity.SHORT}
+    return {check: remedies(reviewed, finding) for check, finding in short.items()}
+
+
+def plant_remedies(reviewed: PlantReview, finding: Finding) -> tuple[Remedy, ...]:
+    """Return what would clear a short finding of a plant: its own number, large enough."""
+    case, key = reviewed.case, finding.fields[0]
+    cell, field = case.plant.typed(key), Plant.catalogue[key]
+    if cell is None or not isinstance(cell.value, float) or field.quantity is None:
+        return ()
+    grid = _Grid(cell.value, decimals(cell.text) or 0, UP)
+    check = registered()[finding.check].plant
+    assert check is not None  # noqa: S101  it has found something in a plant
+
+    def clears(value: float) -> bool:
+        return not any(True for _ in check(case.of(case.plant.replaced({key: value}))))
+
+    steps = _first_clear(grid, clears, lambda _: True)
+    if steps is None:
+        return ()
+    unit = field.quantity.unit(case.site.system)
+    return (Remedy((Change(key, grid.text(steps), unit),), ()),)
 
 
 def remedies(reviewed: UnitReview, finding: Finding) -> tuple[Remedy, ...]:
