@@ -16,6 +16,8 @@ if TYPE_CHECKING:
 P = ParamSpec("P")
 T = TypeVar("T")
 
+_UNKNOWN: Any = object()
+
 
 class figure(Generic[T]):  # noqa: N801  reads as a decorator beside `property`
     """A method turned into a figure: an attribute that is computed once.
@@ -47,21 +49,21 @@ class figure(Generic[T]):  # noqa: N801  reads as a decorator beside `property`
         """
         if evaluation is None:
             return self
+        # What is there stands in the evaluation under its own name, where Python finds it without
+        # asking here again; what is absent, or was given for a trial, is among the known.
         known: dict[str, T | Absent] = evaluation.__dict__.setdefault("_known", {})
-        if self._name not in known:
-            known[self._name] = self._compute(evaluation)
-        result = known[self._name]
+        result = known.get(self._name, _UNKNOWN)
+        if result is _UNKNOWN:
+            try:
+                result = self._method(evaluation)
+            except Absent as absent:
+                result = known[self._name] = absent
+            except StateError as error:
+                result = known[self._name] = Absent(why=str(error))
         if isinstance(result, Absent):
             raise result.with_traceback(None)
+        evaluation.__dict__[self._name] = result
         return result
-
-    def _compute(self, evaluation: object) -> T | Absent:
-        try:
-            return self._method(evaluation)
-        except Absent as absent:
-            return absent
-        except StateError as error:
-            return Absent(why=str(error))
 
 
 def known(ask: Callable[P, T], *args: P.args, **kwargs: P.kwargs) -> T | None:

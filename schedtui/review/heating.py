@@ -6,30 +6,40 @@ counted, which is the safe side; a blow-through one's is, in front of the coils.
 
 from __future__ import annotations
 
-from dataclasses import replace
 from typing import TYPE_CHECKING
 
 from schedtui.air import fan
 from schedtui.air.coil import heating_load
-from schedtui.air.flow import heat_flow
+from schedtui.air.flow import at_part_load, rest_of
 from schedtui.air.mixing import mix
 from schedtui.air.recovery import Effectiveness, recovered, share_before_frost
-from schedtui.air.room import heat_met, moisture_to_add
+from schedtui.air.room import heat_met, heating_supply, moisture_to_add
 from schedtui.errors import Absent
 from schedtui.review.airpath import AirPath
 from schedtui.review.figure import figure
+from schedtui.review.letters import HeatingLetters
 from schedtui.schedule.catalogue.unit import Unit
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
+    from schedtui.air.step import Steps
     from schedtui.units import System
 
+_NO_RECOVERY = "there is no energy recovery"
 # The exhaust of a recovery is kept above freezing unless the unit says otherwise.
 _EXHAUST_LEAST: dict[System, float] = {"IP": 32.0, "SI": 0.0}
 
 
 class Heating(AirPath):
     """One unit at one heating condition."""
+
+    @figure
+    def letters(self) -> HeatingLetters:
+        """The letters of the streams, for a working.
+
+        They hang on figures whose own steps are not due yet, so another evaluation is asked.
+        """
+        return HeatingLetters(type(self)(self.unit, self.condition, self.site))
 
     @figure
     def supply_airflow(self) -> float:
@@ -50,16 +60,15 @@ class Heating(AirPath):
         unit = self.unit
         db = unit.need(Unit.room_heat_db)
         if unit.stated("room_heat_rh"):
-            return self.site.air.by_relative_humidity(db, unit.need(Unit.room_heat_rh))
+            rh = unit.need(Unit.room_heat_rh)
+            return self.site.air.by_relative_humidity(db, rh, self.lettered("r"))
         # What recovery hands over of the room's own moisture does not change it.
-        return self.outdoor.heated_to(db)
+        return self.outdoor.heated_to(db, self.lettered("r", i="o"))
 
     @figure
     def to_recovery(self) -> State:
         """Outdoor air as it meets the recovery or the return air: past a preheat of its own."""
-        if self._preheats("outdoor"):
-            return self._warmed(self.outdoor, self.unit.preheat_lat_db)
-        return self.outdoor
+        return self.preheat_leaving if self.preheats_outdoor else self.outdoor
 
     @figure
     def exhaust_mass(self) -> float:
@@ -68,7 +77,10 @@ class Heating(AirPath):
         airflow = self.unit.exhaust_airflow
         if airflow is None:
             return self.outdoor_mass
-        return self.mass_of(airflow, self.room.v if self.basis == "actual" else None)
+        volume = None
+        if self.basis == "actual":
+            volume = self.room.specific_volume(self.lettered("r"))
+        return self.mass_of(airflow, volume, self.lettered("x", a="r"))
 
     @figure
     def effectiveness(self) -> Effectiveness:
@@ -84,7 +96,7 @@ class Heating(AirPath):
         sensible = _first(unit.recovery_heat_sensible, unit.recovery_sensible)
         latent = _first(unit.recovery_heat_latent, unit.recovery_latent)
         if not (sensible or latent) or self.outdoor_mass == 0:
-            raise Absent("recovery_sensible", why="there is no energy recovery")
+            raise Absent("recovery_sensible", why=_NO_RECOVERY)
         return Effectiveness(sensible, latent, unit.recovery_basis == "least flow")
 
     @figure
@@ -96,29 +108,40 @@ class Heating(AirPath):
         least = self.unit.value_of(Unit.recovery_exhaust_min)
         if least is None:
             least = _EXHAUST_LEAST[self.site.system]
+        exhaust_mass, rated = self.exhaust_mass, self.effectiveness
+        steps = self.named(HeatingLetters.exhaust)
         return share_before_frost(
-            outdoor, self.outdoor_mass, exhaust, self.exhaust_mass, self.effectiveness, least
+            outdoor, self.outdoor_mass, exhaust, exhaust_mass, rated, least, steps
         )
 
     @figure
     def recovered(self) -> State:
         """Outdoor air behind the energy recovery, held back where its exhaust would freeze."""
-        rated, share = self.effectiveness, self.recovery_share
-        working = replace(rated, sensible=rated.sensible * share, latent=rated.latent * share)
-        return recovered(
-            self.to_recovery, self.outdoor_mass, self.room, self.exhaust_mass, working, self.steps
-        )
+        share, outdoor, exhaust_mass = self.recovery_share, self.to_recovery, self.exhaust_mass
+        # One that does not act leaves nothing to be shown.
+        steps = self.named(HeatingLetters.exhaust) if share else None
+        held = self.effectiveness.held_back(share, steps)
+        return recovered(outdoor, self.outdoor_mass, self.room, exhaust_mass, held, steps)
+
+    @property
+    def recovers(self) -> bool:
+        """Whether outdoor air passes a recovery, acting or not.
+
+        Raises:
+            Absent: that cannot be known.
+        """
+        try:
+            self.effectiveness  # noqa: B018  asked for its absence
+        except Absent as absent:
+            if absent.why != _NO_RECOVERY:
+                raise
+            return False
+        return True
 
     @figure
     def intake(self) -> State:
         """Outdoor air as it comes to be mixed."""
-        try:
-            self.effectiveness  # noqa: B018  asked for its absence
-        except Absent as absent:
-            if absent.why != "there is no energy recovery":
-                raise
-            return self.to_recovery
-        return self.recovered
+        return self.recovered if self.recovers else self.to_recovery
 
     @figure
     def mixed(self) -> State:
@@ -127,8 +150,11 @@ class Heating(AirPath):
             return self.room
         if self.outdoor_mass == self.supply_mass:
             return self.intake
-        returned = self.supply_mass - self.outdoor_mass
-        return mix(self.intake, self.outdoor_mass, self.room, returned, self.steps)
+        intake, steps = self.intake, self.lettered("r", p="s", q="o")
+        returned = rest_of(self.supply_mass, self.outdoor_mass, "return air in the mixture", steps)
+        return mix(
+            intake, self.outdoor_mass, self.room, returned, self.named(HeatingLetters.mixing)
+        )
 
     # The coils
 
@@ -137,7 +163,8 @@ class Heating(AirPath):
         """Mixed air, past a fan that blows through."""
         if not self.blows_through:
             return self.mixed
-        return fan.after_fan(self.mixed, self.supply_mass, self.fan_heat)
+        mixed, heat, steps = self.mixed, self.fan_heat, self.lettered("a", i="m", d="f")
+        return fan.after_fan(mixed, self.supply_mass, heat, steps)
 
     @property
     def fan_inlet(self) -> State:
@@ -149,15 +176,25 @@ class Heating(AirPath):
         self.unit.refuse_bad(Unit.preheat_lat_db)
         return self.unit.preheat_lat_db is not None and self.unit.preheat_at == at
 
+    @property
+    def preheats_outdoor(self) -> bool:
+        """Whether a preheat stands in the outdoor air."""
+        return self._preheats("outdoor")
+
+    @property
+    def preheats_mixed(self) -> bool:
+        """Whether a preheat stands in the mixed air."""
+        return self._preheats("mixed")
+
     @staticmethod
-    def _warmed(air: State, db: float | None) -> State:
+    def _warmed(air: State, db: float, steps: Steps | None) -> State:
         """Return air behind a heating coil, which never cools."""
-        return air if db is None or db <= air.db else air.heated_to(db)
+        return air if db <= air.db else air.heated_to(db, steps)
 
     @figure
     def preheat_entering(self) -> State:
         """Air entering the preheat, which stands in the outdoor or in the mixed air."""
-        return self.outdoor if self._preheats("outdoor") else self.to_coils
+        return self.outdoor if self.preheats_outdoor else self.to_coils
 
     @figure
     def preheat_leaving(self) -> State:
@@ -166,19 +203,20 @@ class Heating(AirPath):
         Raises:
             Absent: there is none scheduled.
         """
-        return self._warmed(self.preheat_entering, self.unit.need(Unit.preheat_lat_db))
+        entering, lat_db = self.preheat_entering, self.unit.need(Unit.preheat_lat_db)
+        return self._warmed(entering, lat_db, self.named(HeatingLetters.preheating))
 
     @figure
     def preheat_load(self) -> float:
         """Load of the preheat [MBH | kW]."""
-        mass = self.outdoor_mass if self._preheats("outdoor") else self.supply_mass
+        mass = self.outdoor_mass if self.preheats_outdoor else self.supply_mass
         entering, leaving = self.preheat_entering, self.preheat_leaving
-        return heating_load(mass, entering, leaving.db, self.steps)
+        return heating_load(mass, entering, leaving.db, self.named(HeatingLetters.preheat_load))
 
     @figure
     def heat_entering(self) -> State:
         """Air entering the heating coil: past the preheat that stands in the mixed air."""
-        if self._preheats("mixed"):
+        if self.preheats_mixed:
             return self.preheat_leaving
         return self.to_coils
 
@@ -188,22 +226,23 @@ class Heating(AirPath):
         unit = self.unit
         if not unit.stated("heat_lat_db") and unit.stated("room_heat"):
             return self._needed_by_room()
-        return self._warmed(self.heat_entering, unit.need(Unit.heat_lat_db))
+        entering, lat_db = self.heat_entering, unit.need(Unit.heat_lat_db)
+        return self._warmed(entering, lat_db, self.lettered("s", i="eh"))
 
     def _needed_by_room(self) -> State:
         """Return the air that brings the room its heat, with the entering air's moisture."""
-        entering = self.heat_entering
-        load = self.unit.need(Unit.room_heat) * self.condition.sensible_load / 100
-        in_room = entering.heated_to(self.room.db)
-        per_degree = in_room.heated_to(in_room.db + 1).h - in_room.h
-        of_degree = heat_flow(self.supply_mass, per_degree, self.site.system)
-        return self._warmed(entering, in_room.db + load / of_degree)
+        entering, mass = self.heat_entering, self.supply_mass
+        load, percent = self.unit.need(Unit.room_heat), self.condition.sensible_load
+        heat = at_part_load(load, percent, self.lettered(q="hv", full="rh0"))
+        db = heating_supply(mass, entering, self.room.db, heat, self.lettered("v", i="eh"))
+        return self._warmed(entering, db, self.lettered("s", i="eh"))
 
     @figure
     def heat_load(self) -> float:
         """Load of the heating coil [MBH | kW]."""
         entering, leaving = self.heat_entering, self.heat_leaving
-        return heating_load(self.supply_mass, entering, leaving.db, self.steps)
+        steps = self.lettered(c="s", e="eh", l="s")
+        return heating_load(self.supply_mass, entering, leaving.db, steps)
 
     # The room
 
@@ -221,7 +260,8 @@ class Heating(AirPath):
             Absent: no room humidity is stated for heating.
         """
         self.unit.need(Unit.room_heat_rh)
-        return moisture_to_add(self.outdoor_mass, self.intake, self.room, self.steps)
+        steps = self.named(HeatingLetters.moistening)
+        return moisture_to_add(self.outdoor_mass, self.intake, self.room, steps)
 
     # Water
 

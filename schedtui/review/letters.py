@@ -6,7 +6,8 @@ o outdoor, r room, ret return, x exhaust, rec recovered, m mixed, n mixed for th
 a past a fan that blows through, b around the coil past such a fan, e entering the coil, l leaving
 it, d what it is to leave where it runs otherwise, k the row's own entering air, w past a
 wrap-around, j joined by what went around, g past a fan that draws through, h reheated, u leaving
-the unit, v needed by the room, s supply; a first coil's symbols end in 1.
+the unit, v needed by the room, s supply; a first coil's symbols end in 1. In heating lp leaves the
+preheat and eh enters the heating coil; what leaves that is the supply air.
 """
 
 from __future__ import annotations
@@ -61,6 +62,10 @@ MEANINGS: Mapping[str, str] = {
     "rs": "at the room's dry bulb and the supply's humidity ratio",
     "rv": "at the room's dry bulb and the humidity ratio that it needs",
     "out": "behind the fan",
+    "ex": "exhaust leaving the recovery",
+    "lp": "leaving the preheat",
+    "eh": "entering the heating coil",
+    "rf": "through the return fan",
 }
 """What each subscript means, for the legend of a working."""
 
@@ -221,7 +226,8 @@ class CoolingLetters(Letters):
 
     def exhaust(self) -> Names:
         """Name the steps of a recovery, whose exhaust may be as much as the outdoor air."""
-        return "", {} if self._at.unit.stated("exhaust_airflow") else {"x": "o"}
+        names = {"i": "o"}
+        return "", names if self._at.unit.stated("exhaust_airflow") else names | {"x": "o"}
 
     def mixing(self) -> Names:
         """Name the steps of the mixed air."""
@@ -286,3 +292,83 @@ class CoolingLetters(Letters):
     def supply(self) -> Names:
         """Name the steps of the supply air past the duct."""
         return "s", {"i": self.reheated, "d": "duct"}
+
+
+class HeatingPath(Protocol):
+    """What the letters of a heating condition hang on."""
+
+    unit: Unit
+
+    @property
+    def blows_through(self) -> bool:
+        """Whether the supply fan blows through the coil."""
+
+    @property
+    def recovers(self) -> bool:
+        """Whether outdoor air passes a recovery."""
+
+    @property
+    def preheats_outdoor(self) -> bool:
+        """Whether a preheat stands in the outdoor air."""
+
+
+class HeatingLetters(Letters):
+    """The letters of a unit's air at a heating condition, whose room air is the return air.
+
+    Args:
+        at: the evaluation.
+    """
+
+    def __init__(self, at: HeatingPath) -> None:
+        self._at = at
+
+    # Which letter the air of a place has
+
+    @property
+    def fan_inlet(self) -> str:
+        """The air at the supply fan's inlet."""
+        return "m" if self._at.blows_through else "s"
+
+    @property
+    def to_recovery(self) -> str:
+        """Outdoor air as it meets the recovery or the return air."""
+        return "lp" if self._at.preheats_outdoor else "o"
+
+    @property
+    def intake(self) -> str:
+        """Outdoor air as it comes to be mixed."""
+        return "rec" if self._at.recovers else self.to_recovery
+
+    @property
+    def to_coils(self) -> str:
+        """The air that goes to the coils."""
+        return "a" if self._at.blows_through else "m"
+
+    @property
+    def to_preheat(self) -> str:
+        """The air that goes to the preheat."""
+        return "o" if self._at.preheats_outdoor else self.to_coils
+
+    # What the symbols of a computation become
+
+    def preheating(self) -> Names:
+        """Name the steps of the air past the preheat."""
+        return "lp", {"i": self.to_preheat}
+
+    def preheat_load(self) -> Names:
+        """Name the steps of the preheat's load."""
+        flow = "o" if self._at.preheats_outdoor else "s"
+        return "", {"c": flow, "e": self.to_preheat, "l": "lp", "h": "ph"}
+
+    def exhaust(self) -> Names:
+        """Name the steps of the recovery, whose exhaust may be as much as the outdoor air."""
+        names = {"i": self.to_recovery, "ret": "r"}
+        return "", names if self._at.unit.stated("exhaust_airflow") else names | {"x": "o"}
+
+    def mixing(self) -> Names:
+        """Name the steps of the mixed air."""
+        return "m", {"p": "o", "a": self.intake, "q": "r", "b": "r"}
+
+    def moistening(self) -> Names:
+        """Name the steps of the moisture that the outdoor air lacks."""
+        return "o", {"o": self.intake}

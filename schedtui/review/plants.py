@@ -17,6 +17,7 @@ if TYPE_CHECKING:
     from collections.abc import Iterator, Sequence
 
     from schedtui.review.case import UnitCase
+    from schedtui.review.cooling import Cooling
     from schedtui.review.site import Site
     from schedtui.schedule.catalogue.plant import Plant
     from schedtui.schedule.catalogue.unit import Unit
@@ -44,7 +45,7 @@ class Feed:
         """Return what one unit's coil requires at a condition [MBH | kW], None if not known."""
         if self.side is COOLING:
             at = next((one for one in self.case.cooling if one.name == condition), None)
-            return known(lambda: at.coil.total) if at is not None else 0.0
+            return known(lambda: _both_coils(at)) if at is not None else 0.0
         at_heat = next((one for one in self.case.heating if one.name == condition), None)
         if at_heat is None:
             return 0.0
@@ -106,10 +107,8 @@ class PlantCase:
             return
         number = max(unit.quantity - unit.standby, 0)
         share = number * _part(self.plant, plants)
-        sides = (COOLING,) if self.plant.serves == "cooling" else (HEATING, PREHEAT)
-        for side in sides:
-            if side.runs(unit) and _exists(unit, side):
-                yield Feed(label, case, side, share)
+        for side in _fed(unit, self.plant.serves):
+            yield Feed(label, case, side, share)
 
     def unknown(self, condition: str) -> tuple[str, ...]:
         """Name the units whose load at a condition is not known."""
@@ -171,6 +170,22 @@ def _part(plant: Plant, plants: Sequence[Plant]) -> float:
     if not all(capacities):
         return 1 / len(plants)
     return (plant.capacity or 0.0) / sum(capacities)
+
+
+def _fed(unit: Unit, serves: str) -> tuple[FluidSide, ...]:
+    """Return the coils of a unit that a plant feeds: those of its fluid.
+
+    Where the unit names the plant and has no such coil, whatever it has is fed by it.
+    """
+    sides = (COOLING,) if serves == "cooling" else (HEATING, PREHEAT)
+    there = tuple(side for side in sides if _exists(unit, side))
+    wet = tuple(side for side in there if side.runs(unit))
+    return wet or (there if unit.plants is not None else ())
+
+
+def _both_coils(at: Cooling) -> float:
+    """Return the load of a cooling coil, with that of a first coil in front of it."""
+    return at.coil.total + (at.precool.total if at.has_precool else 0.0)
 
 
 def _exists(unit: Unit, side: FluidSide) -> bool:

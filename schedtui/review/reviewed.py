@@ -10,9 +10,10 @@ from collections import Counter
 from dataclasses import dataclass, field, replace
 from typing import TYPE_CHECKING
 
+from schedtui.review.accept import Key, held, marked, marked_of, of_whom
 from schedtui.review.case import ConditionCase, ScheduleCase, UnitCase
 from schedtui.review.figure import known
-from schedtui.review.finding import Finding, Severity, in_order
+from schedtui.review.finding import Finding, Severity, Subject, in_order
 from schedtui.review.judge import judge_condition, judge_plant, judge_schedule, judge_unit
 from schedtui.review.plants import PlantCase
 from schedtui.review.site import Site, site_of
@@ -36,7 +37,8 @@ class UnitReview:
         case: the unit with its evaluations.
         own: findings of the unit by itself, in the order they are read.
         shared: findings that only the whole schedule shows, a duplicate tag for one.
-        findings: both, in the order they are read.
+        accepted: what of them a reviewer has accepted.
+        findings: both, in the order they are read, the accepted ones marked.
         worst: the worst severity among findings that nobody has accepted.
         status: the unit's state in one word.
     """
@@ -45,6 +47,7 @@ class UnitReview:
     case: UnitCase
     own: tuple[Finding, ...]
     shared: tuple[Finding, ...] = ()
+    accepted: frozenset[Key] = frozenset()
     findings: tuple[Finding, ...] = field(init=False)
     worst: Severity | None = field(init=False)
     status: str = field(init=False)
@@ -52,6 +55,7 @@ class UnitReview:
     def __post_init__(self) -> None:
         """Settle what follows, once: every key on the screen asks for it."""
         findings = in_order((*self.own, *self.shared)) if self.shared else self.own
+        findings = marked(findings, self.accepted)
         worst = max((one.severity for one in findings if not one.accepted), default=None)
         status = CLEAR if worst is None else worst.word
         if any(self.unit.bad_keys()):
@@ -169,7 +173,39 @@ def review(schedule: Schedule, previous: Review | None = None) -> Review:
     rest = [one for one in whole if one.subject.table != "unit"]
     for condition in schedule.conditions:
         rest += judge_condition(ConditionCase(condition, site))
-    return Review(schedule, site, own, review_plants(schedule, site, own), in_order(rest))
+    own = {row_id: _with_acceptances(one, schedule) for row_id, one in own.items()}
+    return _with_loose_acceptances(
+        Review(schedule, site, own, review_plants(schedule, site, own), in_order(rest))
+    )
+
+
+def _with_acceptances(reviewed: UnitReview, schedule: Schedule) -> UnitReview:
+    """Return a unit's review with its acceptances held against its findings."""
+    rows = schedule.document.row("unit", reviewed.unit.row_id).accepted
+    if not rows:
+        return reviewed
+    subject = Subject("unit", reviewed.unit.row_id, reviewed.label)
+    accepted, lapsed = held(rows, reviewed.findings, schedule, subject)
+    return replace(reviewed, shared=(*reviewed.shared, *lapsed), accepted=accepted)
+
+
+def _with_loose_acceptances(reviewed: Review) -> Review:
+    """Return a review with the acceptances that are of no unit held against its findings."""
+    rows = reviewed.schedule.document.rows("accepted")
+    if not rows:
+        return reviewed
+    plants, findings = list(reviewed.plants), list(reviewed.findings)
+    loose = [*findings, *(one for plant in plants for one in plant.findings)]
+    accepted: set[tuple[str, Key]] = set()
+    for of in dict.fromkeys(row.text("of") for row in rows):
+        of_this = [row for row in rows if row.text("of") == of]
+        about = [one for one in loose if of_whom(one) == of]
+        subject = about[0].subject if about else Subject("project", 0, of or "project")
+        keys, lapsed = held(of_this, about, reviewed.schedule, subject)
+        accepted |= {(of, key) for key in keys}
+        findings += lapsed
+    plants = [replace(one, findings=marked_of(one.findings, accepted)) for one in reviewed.plants]
+    return replace(reviewed, plants=tuple(plants), findings=in_order(marked_of(findings, accepted)))
 
 
 def review_plants(
@@ -209,6 +245,7 @@ def _review_unit(
 ) -> UnitReview:
     before = kept.get(unit.row_id)
     if before is not None and before.unit is unit and before.label == label:
-        return replace(before, shared=()) if before.shared else before
+        fresh = not before.shared and not before.accepted
+        return before if fresh else replace(before, shared=(), accepted=frozenset())
     case = UnitCase(unit, schedule, site)
     return UnitReview(label, case, judge_unit(case, label))

@@ -28,7 +28,7 @@ def test_every_row_is_as_wide_as_its_head():
     tables = [keys_table(Unit), keys_table(Condition), limits_table(), checks_table()]
     for table in (*tables, columns_table()):
         assert table.rows
-        assert {len(row) for row in table.rows} == {len(table.head)}
+        assert {len(row) for row in table.rows} == {len(table.headings)}
 
 
 def test_the_keys_of_a_unit():

@@ -104,7 +104,7 @@ class Drawn:
         return self.unit.get("fan_position") == "blow-through"
 
 
-def _pairs(projects: Callable[[str], Any], path: Any) -> list[Drawn]:  # noqa: ANN401  a module's
+def _pairs(projects: Callable[[str], Any], path: Any) -> list[Drawn]:
     found = []
     for system in ("IP", "SI"):
         for project in projects(system):

@@ -277,10 +277,10 @@ class _WinterDraw(_Draw):
         made: Values = {"tag": f"AHU-{place + 1}", "supply_airflow": supply}
         if self._chance(0.3):
             made["heat_airflow"] = self._flow(cfm * self._between(0.5, 0.95))
-        air = made.get("heat_airflow", supply)
+        air = float(made.get("heat_airflow", supply))
         match place % 6:
             case 0:
-                made["outdoor_airflow"] = air
+                made["outdoor_airflow"] = round(air)
             case 1:
                 made["outdoor_airflow"] = 0
             case _:
@@ -310,7 +310,7 @@ class _WinterDraw(_Draw):
         if self._chance(0.75):
             made["heat_lat_db"] = self._degrees(78, 110)
         else:
-            air = unit.get("heat_airflow", unit["supply_airflow"])
+            air = float(unit.get("heat_airflow") or unit["supply_airflow"])
             each = 0.03 if self.system == "IP" else 0.018
             made["room_heat"] = round(air * each * self._between(0.5, 1), 1)
         return made

@@ -90,7 +90,9 @@ class _Draw:
             "room_sensible": self._load(cfm * 0.019),
             "room_latent": self._load(cfm * 0.004),
         }
-        unit |= self.random.choice([{"room_rh": 50}, {"room_wb": round(room - self._rise(11, 14), 1)}])
+        unit |= self.random.choice(
+            [{"room_rh": 50}, {"room_wb": round(room - self._rise(11, 14), 1)}]
+        )
         unit |= self._now_and_then(0.5, return_rise=self._rise(0.5, 4))
         unit |= self._now_and_then(0.15, return_db=self._degrees(76, 82), return_rh=46)
         unit |= self._now_and_then(0.5, duct_rise=self._rise(0.4, 2))

@@ -135,11 +135,11 @@ def station(place: Callable[[Any, float], Moist]) -> Callable[[Any, float], Mois
     """Keep what a station of a path was at a supply mass."""
 
     @wraps(place)
-    def kept(path: Any, supply: float) -> Moist:  # noqa: ANN401  a path of either season
+    def kept(path: Any, supply: float) -> Moist:
         key = (place.__name__, supply)
         if key not in path.kept:
             path.kept[key] = place(path, supply)
-        return path.kept[key]  # type: ignore[no-any-return]
+        return path.kept[key]
 
     return kept
 
@@ -270,9 +270,7 @@ class AirPath:
 
     # Recovery
 
-    def past_recovery(
-        self, air: Moist, supply: float, sensible: float, latent: float
-    ) -> Moist:
+    def past_recovery(self, air: Moist, supply: float, sensible: float, latent: float) -> Moist:
         """Return outdoor air behind a recovery of two effectivenesses; never past saturation."""
         out = self.outdoor_mass(supply)
         share = 1.0

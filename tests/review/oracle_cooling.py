@@ -166,7 +166,10 @@ class CoolingPath(AirPath):
         share = self.bypass(supply)
         if share:
             around = self.around(supply)
-            h, w = (air.h - share * around.h) / (1 - share), (air.w - share * around.w) / (1 - share)
+            h, w = (
+                (air.h - share * around.h) / (1 - share),
+                (air.w - share * around.w) / (1 - share),
+            )
             air = self._of_any(h, w)
         return self.warmer(air, -self.wrap)
 

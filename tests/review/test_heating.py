@@ -196,7 +196,9 @@ def test_mixing_heating_and_the_room_by_hand(one_unit):
 
 
 def test_outdoor_air_of_a_heating_condition(one_unit):
-    text = BY_HAND.replace("outdoor_db = 10.0", "outdoor_db = 5.0").replace("_w = 0.001", "_rh = 80")
+    text = BY_HAND.replace("outdoor_db = 10.0", "outdoor_db = 5.0").replace(
+        "_w = 0.001", "_rh = 80"
+    )
     (at,) = one_unit(text).case.heating
     assert at.name == "winter"
     # Saturation over ice at 5 °F: 0.0010207 lb/lb (Fundamentals 2017, ch. 1, table 2).

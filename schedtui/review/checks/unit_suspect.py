@@ -71,8 +71,8 @@ def find(case: UnitCase) -> Faults:
 
 def _fractions(case: UnitCase) -> Faults:
     for key, field in Unit.catalogue.items():
-        cell = case.unit.typed(key)
-        if field.quantity is not PERCENT or cell is None or not isinstance(cell.value, float):
+        cell = case.unit.typed(key) if field.quantity is PERCENT else None
+        if cell is None or not isinstance(cell.value, float):
             continue
         if 0 < cell.value < 1:
             yield Fault(
