@@ -219,7 +219,7 @@ def held(
     lapsed: list[Finding] = []
     for row in acceptances:
         acceptance = Accepted(row.row_id, schedule.system, row.cells)
-        matching = [one for one in found if _is_of(acceptance, one)]
+        matching = [one for one in found if is_of(acceptance, one)]
         standing = [one for one in matching if basis(one, schedule) == acceptance.basis]
         accepted |= {key_of(one) for one in standing}
         if not standing:
@@ -227,7 +227,7 @@ def held(
     return frozenset(accepted), tuple(lapsed)
 
 
-def _is_of(acceptance: Accepted, finding: Finding) -> bool:
+def is_of(acceptance: Accepted, finding: Finding) -> bool:
     """Tell whether an acceptance is of a finding: check and condition, and fields where given."""
     if acceptance.check != finding.check or acceptance.condition != finding.condition:
         return False
