@@ -134,6 +134,16 @@ class UnitCase:
         return velocity(actual, area, self.site.system)
 
     @figure
+    def heat_face_velocity(self) -> float:
+        """Velocity at the heating coil's face, of the actual volume that leaves it [fpm | m/s]."""
+        area = self.unit.need(Unit.heat_face_area)
+        if area == 0:
+            raise Absent("heat_face_area", why="the face area is 0")
+        at = self.heat_governing
+        actual = volume_flow(at.supply_mass, "actual", self.site.air, at.heat_leaving.v)
+        return velocity(actual, area, self.site.system)
+
+    @figure
     def fan_airflow(self) -> float:
         """Actual volume at the supply fan's inlet [cfm | L/s], at the governing condition."""
         at = self.governing

@@ -235,7 +235,8 @@ def _by_reheat(at: PartLoad, settings: Settings) -> Settings:
 def _by_airflow(at: PartLoad, settings: Settings) -> Settings:
     """Supply less air, down to the outdoor air or the least airflow; the rest by reheat."""
     design = at.design
-    least = max(design.outdoor_mass, design.supply_mass * _least_share(at.unit))
+    share = max(_least_share(at.unit), 1 - _NEARLY_ALL)  # without any air nothing can be balanced
+    least = max(design.outdoor_mass, design.supply_mass * share)
 
     def set_to(mass: float) -> Settings:
         return replace(settings, supply_mass=mass)

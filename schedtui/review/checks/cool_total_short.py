@@ -25,7 +25,10 @@ _MOST_OF = 0.6  # so much of the fan's heat lacking looks like a net capacity
 
 
 def find(at: Cooling) -> Faults:
-    """Hold the scheduled total against the coil's total at one condition."""
+    """Hold the scheduled total of each coil against its load at one condition."""
+    yield from _first_coil(at)
+    if not at.unit.stated("cool_total"):
+        return
     scheduled, required = at.unit.need(Unit.cool_total), at.required_total
     limits = at.site.limits
     allowed = required - at.coil.condensate_heat
@@ -35,6 +38,17 @@ def find(at: Cooling) -> Faults:
             says += "; with the fan's heat of {fan} it would do: is it a net capacity?"
         fan = Measure(at.fan_heat, LOAD)
         yield Fault(says, ("cool_total",), scheduled, required, LOAD, {"fan": fan})
+
+
+def _first_coil(at: Cooling) -> Faults:
+    """Hold the first of two coils in series against its own load."""
+    if at.unit.precool_total is None:
+        return
+    scheduled, load, limits = at.unit.need(Unit.precool_total), at.precool, at.site.limits
+    allowed = load.total - load.condensate_heat
+    if is_short(scheduled, allowed, limits.total_margin, limits.agreement):
+        says = "scheduled total of the first coil {scheduled}, it needs {required}"
+        yield Fault(says, ("precool_total",), scheduled, load.total, LOAD)
 
 
 def _is_net(at: Cooling, scheduled: float, required: float) -> bool:

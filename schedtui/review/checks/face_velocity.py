@@ -19,6 +19,25 @@ if TYPE_CHECKING:
 
 
 def find(case: UnitCase) -> Faults:
+    """Look at the cooling coil and at the heating coil."""
+    yield from _cooling(case)
+    yield from _heating(case)
+
+
+def _heating(case: UnitCase) -> Faults:
+    """Hold the velocity from the heating coil's face area against its limit."""
+    velocity, most = known(lambda: case.heat_face_velocity), case.site.limits.face_velocity_heating
+    if velocity is not None and velocity > most:
+        yield Fault(
+            "face velocity of the heating coil {scheduled}, customary is at most {required}",
+            ("heat_face_area", "heat_airflow"),
+            velocity,
+            most,
+            VELOCITY,
+        )
+
+
+def _cooling(case: UnitCase) -> Faults:
     """Hold the velocity, as stated or from the face area, against the limit."""
     unit, most = case.unit, case.site.limits.face_velocity_cooling
     if known(lambda: case.governing.coil_mode) == "dry":
@@ -41,7 +60,8 @@ def find(case: UnitCase) -> Faults:
 
 CHECK = Check(
     severity=Severity.CAUTION,
-    sentence="The face velocity of the cooling coil carries no moisture over.",
+    sentence="The cooling coil's face velocity carries no moisture over, and the heating coil's is "
+    "not too high.",
     source="common practice",
     unit=find,
 )

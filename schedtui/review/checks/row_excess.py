@@ -16,18 +16,22 @@ from schedtui.units import LOAD
 
 if TYPE_CHECKING:
     from schedtui.review.case import UnitCase
+    from schedtui.schedule.catalogue.field import Field
 
 
 def find(case: UnitCase) -> Faults:
-    """Hold total and sensible against the row's own entering and leaving air."""
+    """Hold total, sensible and heating against the row's own entering and leaving air."""
     unit, row = case.unit, case.row
-    if unit.cool_kind == "dx":
-        return
     share = 1 + case.site.limits.row_excess / 100
-    for field, what, own in (
-        (Unit.cool_total, "total", known(lambda: row.required_total)),
-        (Unit.cool_sensible, "sensible", known(lambda: row.required_sensible)),
-    ):
+    held: list[tuple[Field[float | None], str, float | None]] = []
+    if unit.cool_kind != "dx":
+        held += [
+            (Unit.cool_total, "total", known(lambda: row.required_total)),
+            (Unit.cool_sensible, "sensible", known(lambda: row.required_sensible)),
+        ]
+    if unit.heat_kind in ("hot water", "steam") and unit.stated("heat_eat_db"):
+        held.append((Unit.heat_total, "heating", known(lambda: case.row_heat.heat_load)))
+    for field, what, own in held:
         scheduled = unit.value_of(field)
         if scheduled is not None and own is not None and 0 < own * share < scheduled:
             yield Fault(
