@@ -5,6 +5,7 @@ from __future__ import annotations
 from dataclasses import dataclass
 from typing import TYPE_CHECKING, TypeVar
 
+from schedtui.air.fan import shaft_power
 from schedtui.air.flow import volume_flow
 from schedtui.errors import Absent, StateError
 from schedtui.review.airpath import outdoor_air
@@ -76,12 +77,12 @@ class UnitCase:
             for one in self.conditions
         )
 
-    @property
+    @figure
     def cooling(self) -> tuple[Cooling, ...]:
         """The unit at each of its cooling conditions."""
         return tuple(at for at in self.evaluations if isinstance(at, Cooling))
 
-    @property
+    @figure
     def heating(self) -> tuple[Heating, ...]:
         """The unit at each of its heating conditions."""
         return tuple(at for at in self.evaluations if isinstance(at, Heating))
@@ -132,6 +133,22 @@ class UnitCase:
         at = self.governing
         actual = volume_flow(at.coil_mass, "actual", self.site.air, at.coil_leaving.v)
         return velocity(actual, area, self.site.system)
+
+    @figure
+    def shaft_power(self) -> float:
+        """Shaft power of one supply fan, as stated or from its pressure [bhp | kW]."""
+        unit = self.unit
+        if unit.stated("fan_power"):
+            return unit.need(Unit.fan_power)
+        pressure, efficiency = unit.need(Unit.fan_total_pressure), unit.need(Unit.fan_efficiency)
+        airflow = self.fan_airflow / unit.fan_count
+        return shaft_power(airflow, pressure, efficiency, self.site.system)
+
+    @figure
+    def required_tons(self) -> float:
+        """Tons that the unit's cooling needs at its governing condition, both coils of two."""
+        at = self.governing
+        return at.coil.tons + (at.precool.tons if at.has_precool else 0.0)
 
     @figure
     def heat_face_velocity(self) -> float:

@@ -44,14 +44,11 @@ class Feed:
     def load(self, condition: str) -> float | None:
         """Return what one unit's coil requires at a condition [MBH | kW], None if not known."""
         if self.side is COOLING:
-            at = next((one for one in self.case.cooling if one.name == condition), None)
-            return known(lambda: _both_coils(at)) if at is not None else 0.0
-        at_heat = next((one for one in self.case.heating if one.name == condition), None)
-        if at_heat is None:
-            return 0.0
-        if self.side is PREHEAT:
-            return known(lambda: at_heat.preheat_load)
-        return known(lambda: at_heat.heat_load)
+            cooling = next((one for one in self.case.cooling if one.name == condition), None)
+            return known(_both_coils, cooling) if cooling is not None else 0.0
+        heating = next((one for one in self.case.heating if one.name == condition), None)
+        load = "preheat_load" if self.side is PREHEAT else "heat_load"
+        return known(getattr, heating, load) if heating is not None else 0.0
 
     def flow(self, load: float) -> float | None:
         """Return one unit's flow [gpm | L/s]: as scheduled, else what its load asks for."""
@@ -112,7 +109,8 @@ class PlantCase:
 
     def unknown(self, condition: str) -> tuple[str, ...]:
         """Name the units whose load at a condition is not known."""
-        return tuple(feed.label for feed in self.feeds if feed.load(condition) is None)
+        loads = zip(self.feeds, self.loads[condition], strict=True)
+        return tuple(feed.label for feed, load in loads if load is None)
 
     @figure
     def governing(self) -> str:
@@ -121,17 +119,23 @@ class PlantCase:
         Raises:
             Absent: no condition of the plant's season is there, or nothing is fed.
         """
-        conditions = [
-            one.name or "" for one in self.schedule.conditions if one.season == self.plant.serves
-        ]
-        if not conditions or not self.feeds:
+        if not self.loads or not self.feeds:
             raise Absent(why=f"plant {self.name} feeds no unit at any condition")
-        return max(conditions, key=self.load_at)
+        return max(self.loads, key=self.load_at)
+
+    @figure
+    def loads(self) -> dict[str, tuple[float | None, ...]]:
+        """What one unit of each feed requires, by condition [MBH | kW]; None where not known."""
+        return {
+            name: tuple(feed.load(name) for feed in self.feeds)
+            for one in self.schedule.conditions
+            if one.season == self.plant.serves and (name := one.name)
+        }
 
     def load_at(self, condition: str) -> float:
         """Return the units' load together at a condition, diversity counted [MBH | kW]."""
-        together = sum(feed.share * (feed.load(condition) or 0.0) for feed in self.feeds)
-        return together * self._diversity
+        loads = zip(self.feeds, self.loads[condition], strict=True)
+        return sum(feed.share * (load or 0.0) for feed, load in loads) * self._diversity
 
     @figure
     def load(self) -> float:
@@ -142,8 +146,8 @@ class PlantCase:
     def flow(self) -> float:
         """The flow at the governing condition, diversity counted [gpm | L/s]."""
         together = 0.0
-        for feed in self.feeds:
-            flow = feed.flow(feed.load(self.governing) or 0.0)
+        for feed, load in zip(self.feeds, self.loads[self.governing], strict=True):
+            flow = feed.flow(load or 0.0)
             if flow is None:
                 raise Absent(feed.side.flow.key, why=f"the flow of {feed.label} is not known")
             together += feed.share * flow

@@ -12,6 +12,7 @@ from dataclasses import dataclass
 from functools import lru_cache
 from typing import TYPE_CHECKING
 
+from schedtui.errors import Absent
 from schedtui.review.case import UnitCase
 from schedtui.review.finding import Severity
 from schedtui.review.judge import judge_unit, still_found
@@ -86,7 +87,10 @@ def plant_remedies(reviewed: PlantReview, finding: Finding) -> tuple[Remedy, ...
     assert check is not None  # noqa: S101  it has found something in a plant
 
     def clears(value: float) -> bool:
-        return not any(True for _ in check(case.of(case.plant.replaced({key: value}))))
+        try:
+            return not any(True for _ in check(case.of(case.plant.replaced({key: value}))))
+        except Absent:  # no longer short of what is known, though not all is
+            return True
 
     steps = _first_clear(grid, clears, lambda _: True)
     if steps is None:

@@ -22,6 +22,7 @@ if TYPE_CHECKING:
     from collections.abc import Mapping
 
     from schedtui.schedule.catalogue.unit import Unit
+    from schedtui.schedule.document import Row
     from schedtui.schedule.view import Schedule
 
 UNREADABLE = "unreadable"
@@ -144,7 +145,7 @@ class Review:
         for reviewed in self.units.values():
             unit = reviewed.unit
             number = max(unit.quantity - unit.standby, 0)
-            tons += number * (known(_required_tons, reviewed.case) or 0.0)
+            tons += number * (known(getattr, reviewed.case, "required_tons") or 0.0)
             supply += number * (unit.supply_airflow or 0.0)
             outdoor += number * (unit.outdoor_airflow or 0.0)
         return Totals(tons, supply, outdoor)
@@ -173,17 +174,18 @@ def review(schedule: Schedule, previous: Review | None = None) -> Review:
     rest = [one for one in whole if one.subject.table != "unit"]
     for condition in schedule.conditions:
         rest += judge_condition(ConditionCase(condition, site))
-    own = {row_id: _with_acceptances(one, schedule) for row_id, one in own.items()}
+    for row in schedule.document.rows("unit"):
+        if row.accepted:
+            own[row.row_id] = _with_acceptances(own[row.row_id], row.accepted, schedule)
     return _with_loose_acceptances(
         Review(schedule, site, own, review_plants(schedule, site, own), in_order(rest))
     )
 
 
-def _with_acceptances(reviewed: UnitReview, schedule: Schedule) -> UnitReview:
+def _with_acceptances(
+    reviewed: UnitReview, rows: tuple[Row, ...], schedule: Schedule
+) -> UnitReview:
     """Return a unit's review with its acceptances held against its findings."""
-    rows = schedule.document.row("unit", reviewed.unit.row_id).accepted
-    if not rows:
-        return reviewed
     subject = Subject("unit", reviewed.unit.row_id, reviewed.label)
     accepted, lapsed = held(rows, reviewed.findings, schedule, subject)
     return replace(reviewed, shared=(*reviewed.shared, *lapsed), accepted=accepted)
@@ -220,10 +222,6 @@ def review_plants(
 def _is_rounding_caution(finding: Finding) -> bool:
     """Tell whether a shortfall or conflict was made a caution by the printed digits."""
     return finding.rounding and not finding.accepted and finding.severity is Severity.CAUTION
-
-
-def _required_tons(case: UnitCase) -> float:
-    return case.governing.coil.tons
 
 
 def _same_ground(previous: Review, schedule: Schedule, site: Site) -> bool:

@@ -11,6 +11,7 @@ Cooling: 10 000 cfm of return air from 80/67 to 55/54 °F 399.5 MBH (handbook), 
 import pytest
 
 from schedtui.errors import Absent
+from schedtui.review.remedy import plant_remedies
 
 HEATED = 37 * 10.81998
 MILD = 32 * 10.81998
@@ -272,3 +273,16 @@ def test_a_plant_with_no_unit_has_no_load(first):
 def test_units_whose_load_is_not_known_are_named(first):
     gap = unit('without = ["heat_lat_db"]', "heat_total = 400", tag="B")
     assert first(WINTERS, plant(), unit(), gap).unknown("winter") == ("B",)
+
+
+def test_a_short_plant_with_an_unknown_unit_has_its_remedies(reviewed):
+    """What the plant would need is told for what is known; the gap is no reason to fail."""
+    gap = unit('without = ["heat_lat_db"]', "heat_total = 400", tag="B")
+    (found,) = reviewed(WINTERS + plant(capacity=100) + unit() + gap).plants
+    (short,) = [one for one in found.findings if one.check == "plant-capacity-short"]
+    assert plant_remedies(found, short)[0].changes[0].value >= HEATED * 0.98
+
+
+def test_the_project_s_tons_are_of_both_coils_in_series(reviewed):
+    lines = ("precool_lat_db = 65", "precool_lat_wb = 60", "cool_total = 190")
+    assert reviewed(SUMMERS + unit(*lines)).totals().tons == pytest.approx(COOLED / 12, rel=1e-3)

@@ -26,11 +26,13 @@ def find(at: Cooling) -> Faults:
     unit, limits = at.unit, at.site.limits
     if unit.cool_total is None or at.coil_mode != "wet":
         return
+    if at.has_precool and unit.precool_total is None:
+        return  # the first coil's part of the capacity is not known
     standard = volume_flow(at.coil_mass, "standard", at.site.air)
     per = LOAD_PER_TON["IP"] if at.site.system == "IP" else 1.0
     if unit.cool_total == 0:
         return
-    ratio = standard / unit.cool_total * per
+    ratio = standard / (unit.cool_total + (unit.precool_total or 0.0)) * per
     low = limits.airflow_per_ton_low * (1 - _OUTDOOR * at.outdoor_fraction)
     high = limits.airflow_per_ton_high * (_DRY if at.shr > _DRY_SHR else 1.0)
     for bound, beyond in ((low, ratio < low), (high, ratio > high)):

@@ -9,6 +9,7 @@ from typing import TYPE_CHECKING
 
 from schedtui.review.check import Check, Faults
 from schedtui.review.finding import Fault, Severity
+from schedtui.review.shaft import shaft_of
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import MOTOR_POWER
 
@@ -25,7 +26,7 @@ def find(case: UnitCase) -> Faults:
     """Hold each motor against the shaft power of its fan with the headroom."""
     share = 1 + case.site.limits.motor_headroom / 100
     for motor, fan in _PAIRS:
-        power, shaft = case.unit.value_of(motor), case.unit.value_of(fan)
+        power, shaft = case.unit.value_of(motor), shaft_of(case, fan)
         if power is not None and shaft is not None and shaft <= power < shaft * share:
             yield Fault(
                 "motor {scheduled}, with customary headroom the fan asks for {required}",

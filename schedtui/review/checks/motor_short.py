@@ -9,6 +9,7 @@ from typing import TYPE_CHECKING
 
 from schedtui.review.check import Check, Faults
 from schedtui.review.finding import Fault, Severity
+from schedtui.review.shaft import shaft_of
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import MOTOR_POWER
 
@@ -24,9 +25,10 @@ _PAIRS = (
 def find(case: UnitCase) -> Faults:
     """Hold each motor against the shaft power of its fan."""
     for motor, fan, what in _PAIRS:
-        if not case.unit.stated(motor.key, fan.key):
+        shaft = shaft_of(case, fan)
+        if shaft is None or not case.unit.stated(motor.key):
             continue
-        power, shaft = case.unit.need(motor), case.unit.need(fan)
+        power = case.unit.need(motor)
         if power < shaft:
             yield Fault(
                 "{what} {scheduled}, the fan's shaft takes {required}",
