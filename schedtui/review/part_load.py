@@ -112,6 +112,12 @@ class PartLoad(Cooling):
         return self.design.room.at(w=self.settings.room_w)
 
     @figure
+    def return_air(self) -> State:
+        """Return air at the unit; a humidity given for it moves with the room's."""
+        design = self.design.return_air
+        return design.at(w=max(design.w + self.room.w - self.design.room.w, 0.0))
+
+    @figure
     def bypass_share(self) -> float:
         """Share of the supply air that goes around the coil, by mass."""
         return self.settings.bypass
@@ -138,9 +144,11 @@ class PartLoad(Cooling):
 
     @figure
     def reheated(self) -> State:
-        """Air behind the reheat, which never cools."""
-        air, target = self.before_reheat, self.settings.supply_db
-        return air if target is None or target <= air.db else air.heated_to(target)
+        """Air behind the reheat: as scheduled at full load, and as much more as the room needs."""
+        air = self.before_reheat
+        self.unit.refuse_bad(Unit.reheat_lat_db)
+        targets = (self.unit.reheat_lat_db, self.settings.supply_db)
+        return air.heated_to(max(db for db in (air.db, *targets) if db is not None))
 
     @figure
     def reheat_load(self) -> float:
@@ -150,7 +158,7 @@ class PartLoad(Cooling):
             Absent: the unit does not reheat at this condition.
         """
         if self.settings.supply_db is None:
-            raise Absent("reheat_lat_db", why="the unit does not reheat")
+            self.unit.need(Unit.reheat_lat_db)
         return heating_load(self.supply_mass, self.before_reheat, self.reheated.db)
 
 
