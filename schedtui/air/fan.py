@@ -83,13 +83,16 @@ def shaft_power(
     return power
 
 
-def inlet_airflow(inlet: State, mass: float, steps: Steps | None = None) -> float:
-    """Return the actual volume flow at a fan's inlet [cfm | L/s].
+def inlet_airflow(
+    inlet: State, mass: float, steps: Steps | None = None, where: str = "at the fan's inlet"
+) -> float:
+    """Return the actual volume flow at a fan's inlet, or where else air has a state [cfm | L/s].
 
     Args:
-        inlet: air at the inlet.
-        mass: dry air through the fan [lb/h | kg/s].
+        inlet: air there.
+        mass: dry air through it [lb/h | kg/s].
         steps: the working to append to.
+        where: where that is, for the working.
     """
     air = inlet.air
     named = None if steps is None else steps.named("i")
@@ -101,7 +104,7 @@ def inlet_airflow(inlet: State, mass: float, steps: Steps | None = None) -> floa
             ("m_s", mass, AIR_MASS_FLOW),
             ("v_i", v, SPECIFIC_VOLUME),
         )
-        name = "actual volume flow at the fan's inlet"
+        name = f"actual volume flow {where}"
         steps.append(Step("Q_f", name, formula, numbers, flow, AIRFLOW, HANDBOOK))
     return flow
 

@@ -26,7 +26,7 @@ from schedtui.air.fluid_tables import (
 )
 from schedtui.air.step import DEFINITION, HANDBOOK_LOADS, Number, Step, Steps
 from schedtui.errors import FluidError
-from schedtui.units import LOAD, TEMPERATURE, WATER_FLOW, Quantity, System
+from schedtui.units import LOAD, PERCENT, TEMPERATURE, WATER_FLOW, Quantity, System
 
 FluidKind = Literal["water", "propylene glycol", "ethylene glycol"]
 """What flows in a coil's tubes, glycol meaning its solution in water."""
@@ -67,7 +67,7 @@ class Fluid:
         return f"{self.kind} {self.share:.3g} %" if self.kind != "water" or self.share else "water"
 
 
-def by_volume(kind: FluidKind, share_by_volume: float) -> Fluid:
+def by_volume(kind: FluidKind, share_by_volume: float, steps: Steps | None = None) -> Fluid:
     """Return a fluid whose share of glycol is stated by volume, at 60 °F (15.6 °C).
 
     The volumes are those of glycol and water before they are mixed, as a system is filled.
@@ -75,6 +75,7 @@ def by_volume(kind: FluidKind, share_by_volume: float) -> Fluid:
     Args:
         kind: water, or one of the two glycols in water.
         share_by_volume: of glycol [% by volume].
+        steps: the working to append to, where there is glycol.
 
     Raises:
         FluidError: the share is not one from 0 to 100 %.
@@ -86,8 +87,16 @@ def by_volume(kind: FluidKind, share_by_volume: float) -> Fluid:
         raise FluidError(f"{kind}: a share of {share_by_volume:g} % by volume is not 0 to 100 %")
     if kind == "water":
         return Fluid(kind, share_by_volume)
-    glycol = share_by_volume * GLYCOL_GRAVITY[kind]
-    return Fluid(kind, _ALL * glycol / (glycol + _ALL - share_by_volume))
+    gravity = GLYCOL_GRAVITY[kind]
+    glycol = share_by_volume * gravity
+    fluid = Fluid(kind, _ALL * glycol / (glycol + _ALL - share_by_volume))
+    if steps is not None:
+        numbers: tuple[Number, ...] = (("G_v", share_by_volume, PERCENT),)
+        name = f"share of {kind} by mass, {gravity:g} times as heavy as water"
+        part = f"G_v · {gravity:g}"
+        formula = f"G_m = 100 · {part} / ({part} + 100 − G_v)"
+        steps.append(Step("G_m", name, formula, numbers, fluid.share, PERCENT, DEFINITION))
+    return fluid
 
 
 def freezing_point(fluid: Fluid, system: System) -> float:

@@ -5,17 +5,21 @@ Knows nothing of seasons' schedules; whether recovery pays is asked of it, not d
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING, Final
 
 from schedtui.air.derivation import saturation
-from schedtui.air.step import Number, Step, Steps, enthalpy_step
-from schedtui.units import AIR_MASS_FLOW, HUMIDITY_RATIO, PERCENT, TEMPERATURE
+from schedtui.air.step import DEFINITION, Number, Step, Steps, enthalpy_step
+from schedtui.units import AIR_MASS_FLOW, HUMIDITY_RATIO, PERCENT, RATIO, TEMPERATURE
 
 if TYPE_CHECKING:
     from schedtui.air.state import State
 
 _SOURCE: Final = "ASHRAE Handbook—HVAC Systems and Equipment, air-to-air energy recovery; ASHRAE 84"
+_FROST: Final = (
+    "ASHRAE Handbook—HVAC Systems and Equipment, air-to-air energy recovery, frost control"
+)
+_KINDS: Final = {"s": "sensible", "l": "latent"}
 
 
 @dataclass(frozen=True, slots=True)
@@ -32,6 +36,31 @@ class Effectiveness:
     sensible: float
     latent: float
     by_least_flow: bool = True
+
+    def held_back(self, share: float, steps: Steps | None = None) -> Effectiveness:
+        """Return the effectiveness of a recovery that works with a share of its own.
+
+        Args:
+            share: of the rated effectiveness, 0 to 1.
+            steps: the working to append to, where the share is less than 1.
+        """
+        held = replace(self, sensible=self.sensible * share, latent=self.latent * share)
+        if steps is not None and share != 1:
+            for kind, rated, now in (
+                ("s", self.sensible, held.sensible),
+                ("l", self.latent, held.latent),
+            ):
+                if rated:
+                    numbers: tuple[Number, ...] = (
+                        ("x_fr", share, RATIO),
+                        (f"ε_{kind}r", rated, PERCENT),
+                    )
+                    name = f"{_KINDS[kind]} effectiveness, held back"
+                    formula = f"ε_{kind} = x_fr · ε_{kind}r"
+                    steps.append(
+                        Step(f"ε_{kind}", name, formula, numbers, now, PERCENT, DEFINITION)
+                    )
+        return held
 
 
 def recovered(
@@ -50,7 +79,7 @@ def recovered(
         exhaust: air that leaves through the recovery.
         exhaust_mass: its dry air [lb/h | kg/s].
         effectiveness: of the recovery.
-        steps: the working to append to.
+        steps: the working to append to; the outdoor air has the subscript i there.
 
     Raises:
         AirError: the air would leave the formulas' range.
@@ -84,6 +113,7 @@ def share_before_frost(
     exhaust_mass: float,
     effectiveness: Effectiveness,
     least: float,
+    steps: Steps | None = None,
 ) -> float:
     """Return the share of its effectiveness that a recovery may work with, at most 1.
 
@@ -97,6 +127,7 @@ def share_before_frost(
         exhaust_mass: its dry air [lb/h | kg/s].
         effectiveness: of the recovery as rated.
         least: temperature that the exhaust is kept above [°F | °C].
+        steps: the working to append to; the outdoor air has the subscript i there.
 
     Source: ASHRAE Handbook—HVAC Systems and Equipment, air-to-air energy recovery, frost control.
     """
@@ -106,12 +137,23 @@ def share_before_frost(
     taken = effectiveness.sensible / 100 * flow / exhaust_mass
     # t_4 = t_3 − ε · m_min/m_e · (t_3 − t_1), and W_4 likewise
     leaving = exhaust.db - taken * (exhaust.db - outdoor.db)
+    masses = (("m_o", outdoor_mass, AIR_MASS_FLOW), ("m_x", exhaust_mass, AIR_MASS_FLOW))
+    if steps is not None:
+        _append_exhaust_db(steps, outdoor, exhaust, masses, effectiveness, leaving)
     if leaving >= least:
         return 1.0
     moisture = effectiveness.latent / 100 * flow / exhaust_mass * (exhaust.w - outdoor.w)
+    if steps is not None:
+        w = exhaust.w - moisture
+        _append_exhaust_moisture(steps, outdoor, exhaust, masses, effectiveness, w)
+        t_ex: Number = ("t_ex", leaving, TEMPERATURE)
+        saturation(steps, outdoor.air.formulas, t_ex, outdoor.air.pressure)
     if exhaust.w - moisture <= outdoor.air.saturation_humidity_ratio(leaving):
         return 1.0
-    return max((exhaust.db - least) / (exhaust.db - leaving), 0.0)
+    share = max((exhaust.db - least) / (exhaust.db - leaving), 0.0)
+    if steps is not None:
+        _append_share(steps, exhaust, least, leaving, share)
+    return share
 
 
 def _append(
@@ -127,23 +169,23 @@ def _append(
     numbers: tuple[Number, ...] = ()
     if effectiveness.by_least_flow:
         ratio, numbers = " · min(m_o, m_x) / m_o", masses
-    name, formula = "recovered dry bulb", f"t_rec = t_o − ε_s / 100{ratio} · (t_o − t_ret)"
+    name, formula = "recovered dry bulb", f"t_rec = t_i − ε_s / 100{ratio} · (t_i − t_ret)"
     given: tuple[Number, ...] = (
-        ("t_o", outdoor.db, TEMPERATURE),
+        ("t_i", outdoor.db, TEMPERATURE),
         ("t_ret", exhaust.db, TEMPERATURE),
         ("ε_s", effectiveness.sensible, PERCENT),
         *numbers,
     )
     steps.append(Step("t_rec", name, formula, given, state.db, TEMPERATURE, _SOURCE))
-    name, formula = "recovered humidity ratio", f"W_rec = W_o − ε_l / 100{ratio} · (W_o − W_ret)"
+    name, formula = "recovered humidity ratio", f"W_rec = W_i − ε_l / 100{ratio} · (W_i − W_ret)"
     given = (
-        ("W_o", outdoor.w, HUMIDITY_RATIO),
+        ("W_i", outdoor.w, HUMIDITY_RATIO),
         ("W_ret", exhaust.w, HUMIDITY_RATIO),
         ("ε_l", effectiveness.latent, PERCENT),
         *numbers,
     )
     if effectiveness.latent == 0:
-        name, formula, given = f"{name}: as before", "W_rec = W_o", given[:1]
+        name, formula, given = f"{name}: as before", "W_rec = W_i", given[:1]
     t_rec: Number = ("t_rec", state.db, TEMPERATURE)
     if state.w == state.air.saturation_humidity_ratio(state.db):
         saturation(steps, state.air.formulas, t_rec, state.air.pressure)
@@ -153,3 +195,65 @@ def _append(
     w_rec: Number = ("W_rec", state.w, HUMIDITY_RATIO)
     name = "enthalpy of the recovered air"
     steps.append(enthalpy_step(state.air.system, "h_rec", name, t_rec, w_rec, state.h))
+
+
+def _flows_of_exhaust(
+    effectiveness: Effectiveness, masses: tuple[Number, Number]
+) -> tuple[str, tuple[Number, ...]]:
+    """Return what the exhaust's flow makes of the effectiveness, as printed, and its numbers."""
+    return ("min(m_o, m_x) / m_x" if effectiveness.by_least_flow else "m_o / m_x"), masses
+
+
+def _append_exhaust_db(
+    steps: Steps,
+    outdoor: State,
+    exhaust: State,
+    masses: tuple[Number, Number],
+    effectiveness: Effectiveness,
+    leaving: float,
+) -> None:
+    """Append the dry bulb that the exhaust would leave at if nothing held the recovery back."""
+    ratio, flows = _flows_of_exhaust(effectiveness, masses)
+    numbers: tuple[Number, ...] = (
+        ("t_ret", exhaust.db, TEMPERATURE),
+        ("ε_sr", effectiveness.sensible, PERCENT),
+        *flows,
+        ("t_i", outdoor.db, TEMPERATURE),
+    )
+    name = "dry bulb of the exhaust leaving the recovery, at its rated effectiveness"
+    formula = f"t_ex = t_ret − ε_sr / 100 · {ratio} · (t_ret − t_i)"
+    steps.append(Step("t_ex", name, formula, numbers, leaving, TEMPERATURE, _SOURCE))
+
+
+def _append_exhaust_moisture(
+    steps: Steps,
+    outdoor: State,
+    exhaust: State,
+    masses: tuple[Number, Number],
+    effectiveness: Effectiveness,
+    w: float,
+) -> None:
+    """Append the humidity ratio that the exhaust would leave with likewise."""
+    ratio, flows = _flows_of_exhaust(effectiveness, masses)
+    numbers: tuple[Number, ...] = (("W_ret", exhaust.w, HUMIDITY_RATIO),)
+    name, formula = "its humidity ratio", "W_ex = W_ret"
+    if effectiveness.latent:
+        formula = f"W_ex = W_ret − ε_lr / 100 · {ratio} · (W_ret − W_i)"
+        numbers += (
+            ("ε_lr", effectiveness.latent, PERCENT),
+            *flows,
+            ("W_i", outdoor.w, HUMIDITY_RATIO),
+        )
+    steps.append(Step("W_ex", name, formula, numbers, w, HUMIDITY_RATIO, _SOURCE))
+
+
+def _append_share(steps: Steps, exhaust: State, least: float, leaving: float, share: float) -> None:
+    """Append the share of its effectiveness that keeps the exhaust from freezing."""
+    numbers: tuple[Number, ...] = (
+        ("t_ret", exhaust.db, TEMPERATURE),
+        ("t_min", least, TEMPERATURE),
+        ("t_ex", leaving, TEMPERATURE),
+    )
+    name = "share of the effectiveness at which the exhaust leaves no colder than allowed"
+    formula = "x_fr = max((t_ret − t_min) / (t_ret − t_ex), 0)"
+    steps.append(Step("x_fr", name, formula, numbers, share, RATIO, _FROST))

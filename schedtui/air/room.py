@@ -94,14 +94,55 @@ def heat_met(mass: float, supply: State, room_db: float, steps: Steps | None = N
     cooled = supply.heated_to(room_db)
     heat = heat_flow(mass, supply.h - cooled.h, system)
     if steps is not None:
+        t_r, w_s = ("t_r", room_db, TEMPERATURE), ("W_s", supply.w, HUMIDITY_RATIO)
+        steps.append(enthalpy_step(system, "h_rs", _CORNER, t_r, w_s, cooled.h))
         numbers: tuple[Number, ...] = (
             ("m_s", mass, AIR_MASS_FLOW),
             ("h_s", supply.h, ENTHALPY),
-            ("h_r", cooled.h, ENTHALPY),
+            ("h_rs", cooled.h, ENTHALPY),
         )
-        formula = f"q_h = m_s · (h_s − h_r){PER_THOUSAND[system]}"
-        steps.append(Step("q_h", "room heat met", formula, numbers, heat, LOAD, HANDBOOK_LOADS))
+        formula = f"q_rh = m_s · (h_s − h_rs){PER_THOUSAND[system]}"
+        steps.append(Step("q_rh", "room heat met", formula, numbers, heat, LOAD, HANDBOOK_LOADS))
     return heat
+
+
+def heating_supply(
+    mass: float, before: State, room_db: float, heat: float, steps: Steps | None = None
+) -> float:
+    """Return the dry bulb at which supply air brings a room its heat [°F | °C].
+
+    Args:
+        mass: dry supply air [lb/h | kg/s].
+        before: the air before it is heated, as moist as it is to be.
+        room_db: dry bulb of the room [°F | °C].
+        heat: that the room needs [MBH | kW].
+        steps: the working to append to; the air before has the subscript i there.
+
+    Raises:
+        AirError: no air flows.
+
+    Source: the heat of `heat_met`, solved for the supply dry bulb.
+
+    >>> from schedtui.air.state import Air
+    >>> heating_supply(45_000, Air("IP", 14.696).by_humidity_ratio(50, 0.003), 70, 300)
+    97.62
+    """
+    air = before.air
+    # Enthalpy is linear in the dry bulb: its rise from 0 to 1 is the heat of a degree.
+    per_degree = air.enthalpy(1.0, before.w) - air.enthalpy(0.0, before.w)
+    db = room_db + enthalpy_difference(mass, heat, air.system) / per_degree
+    if steps is not None:
+        degree = {"IP": "(0.24 + 0.444 · W_i)", "SI": "(1.006 + 1.86 · W_i)"}[air.system]
+        numbers: tuple[Number, ...] = (
+            ("t_r", room_db, TEMPERATURE),
+            ("q_hv", heat, LOAD),
+            ("m_s", mass, AIR_MASS_FLOW),
+            ("W_i", before.w, HUMIDITY_RATIO),
+        )
+        formula = f"t = t_r + q_hv{TIMES_THOUSAND[air.system]} / (m_s · {degree})"
+        name = "dry bulb that brings the room its heat"
+        steps.append(Step("t", name, formula, numbers, db, TEMPERATURE, HANDBOOK_LOADS))
+    return db
 
 
 def supply_moisture(mass: float, room: State, latent: float, steps: Steps | None = None) -> float:

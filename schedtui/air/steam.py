@@ -1,4 +1,4 @@
-"""Steam and electricity: the heat of a coil that no flow of liquid brings.
+"""Steam, electricity and fuel: the heat of a coil that no flow of liquid brings.
 
 Steam gives its latent heat at the pressure in the coil; what condensate gives when it cools
 further is not counted.
@@ -24,6 +24,7 @@ from schedtui.units import (
     ENTHALPY,
     LOAD,
     MOISTURE_FLOW,
+    PERCENT,
     STATION_PRESSURE,
     STEAM_PRESSURE,
     System,
@@ -33,6 +34,7 @@ HEAT_PER_KILOWATT: Final[dict[System, float]] = {"IP": 3.41214, "SI": 1.0}
 """Heat of a kilowatt [MBH | kW]: 3412.14 Btu/h."""
 
 _COILS = "ASHRAE Handbook—HVAC Systems and Equipment, air-heating coils"
+_FURNACES = "ASHRAE Handbook—HVAC Systems and Equipment, furnaces"
 _UNITS = "ASHRAE Handbook—Fundamentals, units and conversions"
 _PER_LOAD: Final[dict[System, float]] = {"IP": 1000.0, "SI": 3600.0}  # Btu/h in MBH; kJ/h in kW
 
@@ -166,4 +168,25 @@ def electric_heat(power: float, system: System, steps: Steps | None = None) -> f
         numbers: tuple[Number, ...] = (("P_el", power, ELECTRIC_POWER),)
         formula = {"IP": "q_el = P_el · 3412.14 / 1000", "SI": "q_el = P_el"}[system]
         steps.append(Step("q_el", "heat of electricity", formula, numbers, heat, LOAD, _UNITS))
+    return heat
+
+
+def fuel_heat(heat_input: float, efficiency: float, steps: Steps | None = None) -> float:
+    """Return the heat [MBH | kW] that fuel gives the air.
+
+    Args:
+        heat_input: heat of the fuel burnt [MBH | kW].
+        efficiency: share of it that reaches the air [%].
+        steps: the working to append to.
+
+    Source: ASHRAE Handbook—HVAC Systems and Equipment, furnaces: output is input times efficiency.
+
+    >>> fuel_heat(200, 80)
+    160.0
+    """
+    heat = heat_input * efficiency / 100
+    if steps is not None:
+        numbers: tuple[Number, ...] = (("q_in", heat_input, LOAD), ("η_fu", efficiency, PERCENT))
+        formula = "q_fu = q_in · η_fu / 100"
+        steps.append(Step("q_fu", "heat of the fuel", formula, numbers, heat, LOAD, _FURNACES))
     return heat

@@ -7,9 +7,11 @@ with more again, so that a pocket calculator comes to the printed result from th
 from __future__ import annotations
 
 import math
+import re
 from typing import TYPE_CHECKING, Final
 
 from schedtui.air.derivation import ABSOLUTE_TEMPERATURE
+from schedtui.air.fluid import DENSITY, HEAT_FACTOR, SPECIFIC_HEAT
 from schedtui.air.step import OF_A_STREAM, SYMBOL
 from schedtui.report.page import (
     CAUTION,
@@ -22,14 +24,16 @@ from schedtui.report.page import (
     Paragraph,
     Table,
 )
-from schedtui.review.cooling import Cooling
+from schedtui.review.equipment_stages import equipment
 from schedtui.review.figure import known
+from schedtui.review.heating import Heating
 from schedtui.review.letters import MEANINGS
-from schedtui.review.working import Stage, Working, site_stage, without_repeats, working
+from schedtui.review.working import Working, site_stage, without_repeats, working
 from schedtui.units import (
     AIR_MASS_FLOW,
     AIR_PRESSURE,
     AIRFLOW,
+    ELECTRIC_POWER,
     ENTHALPY,
     HUMIDITY_RATIO,
     LOAD,
@@ -40,20 +44,24 @@ from schedtui.units import (
     SHAFT_POWER,
     SPECIFIC_VOLUME,
     STATION_PRESSURE,
+    STEAM_PRESSURE,
     TEMPERATURE,
     TEMPERATURE_DIFFERENCE,
+    VELOCITY,
+    WATER_FLOW,
     Quantity,
     System,
     format_number,
 )
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator, Sequence
+    from collections.abc import Callable, Iterator, Sequence
 
     from schedtui.air.step import Number, Step
-    from schedtui.review.airpath import AirPath
     from schedtui.review.case import UnitCase
+    from schedtui.review.cooling import Cooling
     from schedtui.review.reviewed import UnitReview
+    from schedtui.review.stages import Outcome, Stage
 
 # Decimals of a printed result, IP and SI. Every one of them comes out again of the numbers put in.
 _DIGITS: Final[dict[Quantity, tuple[int, int]]] = {
@@ -73,10 +81,19 @@ _DIGITS: Final[dict[Quantity, tuple[int, int]]] = {
     AIR_PRESSURE: (3, 1),
     RATIO: (4, 4),
     PERCENT: (2, 2),
+    WATER_FLOW: (2, 3),
+    STEAM_PRESSURE: (2, 2),
+    ELECTRIC_POWER: (2, 2),
+    VELOCITY: (1, 3),
+    DENSITY: (4, 5),
+    SPECIFIC_HEAT: (4, 4),
+    HEAT_FACTOR: (2, 4),
 }
+_SYMBOL: Final = re.compile(SYMBOL.pattern.replace("Δ", "Δρ"))  # a density is no stream's
 _MORE = 3  # decimals that a number put in has beyond those of a result
 _SIGNIFICANT = 8  # figures that it has at least, where it is small
 
+_BESIDE: Final = "water, power and fans, as the row states them"
 _HOW: Final = (
     "Below each result stand the formula and the numbers put in, which carry more digits than the "
     "results do: with them a calculator comes to the result printed. Numbers in brackets name the "
@@ -85,15 +102,15 @@ _HOW: Final = (
 
 
 def unit_working_page(reviewed: UnitReview) -> Page:
-    """Return the working of a unit at every condition, the governing one first."""
+    """Return the working of a unit at every condition, the governing ones first."""
     case = reviewed.case
-    governing = known(lambda: case.governing)
-    ordered = sorted(case.evaluations, key=lambda at: at is not governing)
+    governing = known(lambda: case.governing), known(lambda: case.heat_governing)
+    ordered = sorted(case.evaluations, key=lambda at: at not in governing)
     return Page((*_unit_blocks(reviewed, ordered), Paragraph(CAUTION)))
 
 
 def working_page(units: Sequence[UnitReview], condition: str | None, title: str) -> Page:
-    """Return the working of units at a condition, or at all of theirs in the file's order.
+    """Return the working of units at a condition, or at all of theirs: cooling, then heating.
 
     Args:
         units: the units' reviews.
@@ -109,7 +126,7 @@ def working_page(units: Sequence[UnitReview], condition: str | None, title: str)
     return Page((*blocks, Paragraph(CAUTION)))
 
 
-def _unit_blocks(reviewed: UnitReview, evaluations: Sequence[AirPath]) -> Iterator[Block]:
+def _unit_blocks(reviewed: UnitReview, evaluations: Sequence[Cooling | Heating]) -> Iterator[Block]:
     """Yield a unit's working at some of its conditions, with its symbols and sources."""
     case = reviewed.case
     system = case.site.system
@@ -121,52 +138,64 @@ def _unit_blocks(reviewed: UnitReview, evaluations: Sequence[AirPath]) -> Iterat
     yield Paragraph(_HOW)
     site = site_stage(case)
     yield from _stage(site, system, sources)
-    cooling = [at for at in evaluations if isinstance(at, Cooling)]
-    workings = without_repeats([working(at) for at in cooling])
-    by_evaluation = dict(zip(map(id, cooling), workings, strict=True))
-    for at in evaluations:
+    ordered = sorted(evaluations, key=lambda at: isinstance(at, Heating))
+    workings = without_repeats([working(at) for at in ordered])
+    for at, found in zip(ordered, workings, strict=True):
         yield Heading(f"{reviewed.label} at {at.name}{_role(case, at)}", 2)
-        found = by_evaluation.get(id(at))
-        if found is None:
-            yield Paragraph(
-                "A heating condition: its loads are computed and checked, but their working is not "
-                "printed yet."
-            )
-        else:
-            yield from _condition(found, case, system, sources)
-    steps = [step for one in (site, *(s for w in workings for s in w.stages)) for step in one.steps]
-    yield from _legend(steps, system)
+        yield from _condition(found, at, case, sources)
+    beside, outcomes = equipment(case)
+    if beside:
+        yield Heading(f"{reviewed.label}: {_BESIDE}", 2)
+        for stage in beside:
+            yield from _stage(stage, system, sources)
+        yield from _outcomes(outcomes, "Computed", "Scheduled", "Off by %", system)
+    stages = (site, *(s for w in workings for s in w.stages), *beside)
+    yield from _legend([step for one in stages for step in one.steps], system)
     yield from _sources(sources)
 
 
-def _role(case: UnitCase, at: AirPath) -> str:
-    roles = (("governing", lambda: case.governing), ("rated", lambda: case.rated))
+def _role(case: UnitCase, at: Cooling | Heating) -> str:
+    roles: tuple[tuple[str, Callable[[], object]], ...] = (
+        ("governing", lambda: case.governing),
+        ("governing", lambda: case.heat_governing),
+        ("rated", lambda: case.rated),
+    )
     said = [word for word, ask in roles if known(ask) is at]
     return f" ({' and '.join(said)})" if said else ""
 
 
 def _condition(
-    found: Working, case: UnitCase, system: System, sources: dict[str, int]
+    found: Working, at: Cooling | Heating, case: UnitCase, sources: dict[str, int]
 ) -> Iterator[Block]:
+    system = case.site.system
     for stage in found.stages:
         yield from _stage(stage, system, sources)
     if not found.outcomes:
         return
-    yield Heading("Required and provided", 3)
+    yield from _outcomes(found.outcomes, "Required", "Provided", "Margin %", system)
+    rated = known(lambda: case.rated)
+    if rated is not None and rated.name != found.condition and not isinstance(at, Heating):
+        yield Paragraph(f"Sensible capacity is judged at the rated condition, {rated.name}.")
+
+
+def _outcomes(
+    outcomes: Sequence[Outcome], one: str, other: str, off: str, system: System
+) -> Iterator[Block]:
+    """Yield what is required or computed, under `one`, beside what there is, under `other`."""
+    if not outcomes:
+        return
+    yield Heading(f"{one} and {other.lower()}", 3)
     rows = tuple(
         (
-            one.label,
-            _or_dash(one.required, one.quantity.digits(system)),
-            _or_dash(one.provided, one.quantity.digits(system)),
-            one.quantity.unit(system),
-            _or_dash(one.margin, 1),
+            found.label,
+            _or_dash(found.required, found.quantity.digits(system)),
+            _or_dash(found.provided, found.quantity.digits(system)),
+            found.quantity.unit(system),
+            _or_dash(found.margin, 1),
         )
-        for one in found.outcomes
+        for found in outcomes
     )
-    yield Table(("Figure", "Required", "Provided", "Unit", "Margin %"), rows, frozenset({1, 2, 4}))
-    rated = known(lambda: case.rated)
-    if rated is not None and rated.name != found.condition:
-        yield Paragraph(f"Sensible capacity is judged at the rated condition, {rated.name}.")
+    yield Table(("Figure", one, other, "Unit", off), rows, frozenset({1, 2, 4}))
 
 
 def _stage(stage: Stage, system: System, sources: dict[str, int]) -> Iterator[Block]:
@@ -203,7 +232,7 @@ def _filled(formula: str, numbers: tuple[Number, ...], system: System) -> str:
     in_brackets = {
         symbol: f"({text})" if text.startswith("−") else text for symbol, text in texts.items()
     }
-    return SYMBOL.sub(lambda match: in_brackets.get(match[0], match[0]), formula)
+    return _SYMBOL.sub(lambda match: in_brackets.get(match[0], match[0]), formula)
 
 
 def result(value: float, quantity: Quantity, system: System) -> str:
@@ -248,9 +277,9 @@ def _legend(steps: Sequence[Step], system: System) -> Iterator[Block]:
     for step in steps:
         for symbol, _, quantity in ((step.symbol, 0.0, step.quantity), *step.numbers):
             letter, _, subscript = symbol.partition("_")
-            name = _LETTERS.get(letter, quantity.name)
-            if symbol != "m_w":  # condensate: a flow of water by another unit
-                letters.setdefault(letter, (name, quantity.unit(system)))
+            name, unit = _LETTERS.get(letter, quantity.name), quantity.unit(system)
+            if letters.setdefault(letter, (name, unit))[1] != unit:
+                letters[symbol] = (quantity.name, unit)  # one letter, and another quantity
             if letter in OF_A_STREAM and symbol != "m_w":
                 subscripts.add(subscript)
     if not letters:
@@ -274,7 +303,11 @@ _LETTERS: Final = {
     "x": "share",
     "ε": "effectiveness",
     "η": "efficiency",
-    "m": "mass flow of dry air; m_w the condensate",
+    "m": "mass flow of dry air",
+    "c": "specific heat, c_p",
+    "K": "heat factor of a fluid",
+    "V": "velocity",
+    "G": "share of glycol",
     "B": "bypass, as stated",
     "L": "part of the design load",
     "SHR": "sensible heat ratio",

@@ -19,6 +19,7 @@ from schedtui.review.figure import known
 if TYPE_CHECKING:
     from collections.abc import Mapping
 
+    from schedtui.air.state import State
     from schedtui.schedule.catalogue.unit import Unit
 
 Names = tuple[str, "Mapping[str, str]"]
@@ -63,9 +64,16 @@ MEANINGS: Mapping[str, str] = {
     "rv": "at the room's dry bulb and the humidity ratio that it needs",
     "out": "behind the fan",
     "ex": "exhaust leaving the recovery",
+    "min": "least that the exhaust may leave the recovery at",
     "lp": "leaving the preheat",
     "eh": "entering the heating coil",
-    "rf": "through the return fan",
+    "ra": "return air through its fan",
+    "rf": "at the return fan",
+    "fc": "at the face of the cooling coil",
+    "fh": "at the face of the heating coil",
+    "cw": "water of the cooling coil",
+    "hw": "water of the heating coil",
+    "pw": "water of the preheat",
 }
 """What each subscript means, for the legend of a working."""
 
@@ -110,8 +118,12 @@ class CoolingPath(Protocol):
         """Whether a fan that draws through warms the air."""
 
     @property
-    def reheats(self) -> bool:
-        """Whether the reheat warms the air."""
+    def before_reheat(self) -> State:
+        """Air that leaves the cooling part of the unit."""
+
+    @property
+    def reheated(self) -> State:
+        """Air behind the reheat."""
 
 
 class Letters:
@@ -220,7 +232,8 @@ class CoolingLetters(Letters):
     @property
     def reheated(self) -> str:
         """The air behind the reheat."""
-        return "h" if self._at.reheats else self.before_reheat
+        warmed = self._at.reheated.db > self._at.before_reheat.db
+        return "h" if warmed else self.before_reheat
 
     # What the symbols of a computation become
 

@@ -121,7 +121,7 @@ def asked(stops: Sequence[Stop[P]], at: P, plain: P) -> Iterator[Stage]:
         given: tuple[Number, ...] = ()
         if state is not None and stop.letter:
             same = next((title for title, one in states if one == state), "")
-            letter = stop.letter if isinstance(stop.letter, str) else stop.letter(plain)
+            letter = stop.letter if isinstance(stop.letter, str) else stop.letter(at)
             given = tuple(_not_derived(at.steps, letter, state))
             states.append((stop.title, state))
         steps = tuple(at.steps[start:])

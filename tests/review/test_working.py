@@ -11,6 +11,7 @@ import pytest
 import tomli_w
 
 from schedtui.review.figure import known
+from schedtui.review.part_load import PartLoad
 from schedtui.review.quantities import COOLING_FIGURES
 from schedtui.review.working import site_stage, without_repeats, working
 
@@ -22,17 +23,21 @@ STATED_TOO = {"p_0", "p_f", "P_each", "t_d1", "q_tk", "q_sk", "q_tn", "q_sn",
 AGAIN = {"T", "p_sat", "p_w", "W_sat", "q_f", "Δt_f", "Q_f", "P", "x_b", "t_out", "h_out"}
 
 
-@pytest.fixture(scope="module")
-def invented():
-    """The invented units."""
-    name = "tests.review.invented"
+def beside(stem: str):
+    name = f"tests.review.{stem}"
     if name not in sys.modules:
-        spec = importlib.util.spec_from_file_location(name, Path(__file__).with_name("invented.py"))
+        spec = importlib.util.spec_from_file_location(name, Path(__file__).with_name(f"{stem}.py"))
         assert spec is not None
         assert spec.loader is not None
         sys.modules[name] = importlib.util.module_from_spec(spec)
         spec.loader.exec_module(sys.modules[name])
     return sys.modules[name]
+
+
+@pytest.fixture(scope="module")
+def invented():
+    """The invented units."""
+    return beside("invented")
 
 
 @pytest.fixture(scope="module")
@@ -72,10 +77,25 @@ def test_every_number_put_in_was_a_result_or_is_stated(evaluations) -> None:
                 values[step.symbol] = step.result
 
 
+def test_part_load_shows_what_it_settles_at_and_comes_to(one_unit) -> None:
+    text = PLAIN.replace("outdoor_rh = 40", "outdoor_rh = 60\nsensible_load = 60")
+    text = text.replace("outdoor_airflow = 10000", "outdoor_airflow = 2000")
+    text += 'room_sensible = 190\nroom_latent = 30\ncapacity_control = "bypass"\n'
+    at = next(at for at in one_unit(text).case.cooling if at.name == "mild")
+    told = working(at)
+    settled = told.stages[0]
+    assert "bypass" in settled.words[0]
+    given = {symbol: value for symbol, value, _ in settled.given}
+    assert given["x_b"] == at.bypass_share > 0
+    met = {one.label: one for one in told.outcomes}["Room sensible, met"]
+    assert met.required == pytest.approx(0.6 * 190)
+    assert met.provided == pytest.approx(0.6 * 190)
+
+
 def test_what_goes_in_ahead_comes_out_alike(evaluations) -> None:
     seen = 0
     for _, at in evaluations:
-        if at.basis != "actual":
+        if at.basis != "actual" or isinstance(at, PartLoad):
             continue
         steps = [step for stage in working(at).stages for step in stage.steps]
         mass = next(step for step in steps if step.symbol == "m_s")
@@ -96,7 +116,9 @@ def test_the_steps_end_in_the_figures_of_the_evaluation(evaluations) -> None:
     figures = {figure.key: figure for figure in COOLING_FIGURES}
     compared = 0
     for _, at in evaluations:
-        results = {s.symbol: s.result for stage in working(at).stages for s in stage.steps}
+        stages = working(at).stages
+        results = {symbol: value for stage in stages for symbol, value, _ in stage.given}
+        results |= {s.symbol: s.result for stage in stages for s in stage.steps}
         for key, symbol in of_figure.items():
             value = known(figures[key].get, at)
             if value is not None:

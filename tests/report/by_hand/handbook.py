@@ -17,6 +17,14 @@ def _p_sat_ip(T):  # noqa: N803  the handbook's symbol; eq. 6
     )  # fmt: skip
 
 
+def _p_sat_ice_ip(T):  # noqa: N803  the handbook's symbol; eq. 5
+    return exp(
+        -10214.165 / T - 4.8932428 - 0.0053765794 * T + 0.00000019202377 * T * T
+        + 0.00000000035575832 * T * T * T - 0.000000000000090344688 * T * T * T * T
+        + 4.1635019 * log(T)
+    )  # fmt: skip
+
+
 def _p_sat_si(T):  # noqa: N803  the handbook's symbol; eq. 6, Pa into kPa
     pascal = exp(
         -5800.2206 / T + 1.3914993 - 0.048640239 * T + 0.000041764768 * T * T
@@ -46,12 +54,16 @@ BOTH = {
     "mixture": _mixture,
     "line": _line,
     "BF": lambda leaving, adp, entering: (leaving - adp) / (entering - adp),
+    "exhausted": lambda x3, e, m_o, m_x, x1: x3 - e / 100 * (min(m_o, m_x) / m_x) * (x3 - x1),
+    "ratio less": lambda a, b, c: (a - b) / (a - c),
+    "mean": lambda a, b: (a + b) / 2,
     "recovered": lambda x1, e, m_o, m_x, x3: x1 - e / 100 * (min(m_o, m_x) / m_o) * (x1 - x3),
 }
 IP = {
     **BOTH,
     "T": lambda t: t + 459.67,
     "p_sat": _p_sat_ip,
+    "p_sat ice": _p_sat_ice_ip,
     "station": lambda z: 14.696 * (1 - z * 0.0000068754) ** 5.2559,
     "W wet": lambda wb, ws, t: (
         ((1093 - 0.556 * wb) * ws - 0.240 * (t - wb)) / (1093 + 0.444 * t - wb)
@@ -69,6 +81,9 @@ IP = {
     "shaft": lambda q, p, e: q * p / 6356 / (e / 100),
     "fan heat": lambda p, e: p * 2.545 / (e / 100),
     "fan rise": lambda q, m, w: q * 1000 / m / (0.240 + 0.444 * w),
+    "by mass": lambda share: share * 1.04 / (share * 1.04 + 100 - share) * 100,
+    "water factor": lambda density, heat: density * heat * 60,
+    "carried": lambda k, q, t1, t2: k * q * (t1 - t2) / 1000,
 }
 SI = {
     **BOTH,
