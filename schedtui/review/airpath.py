@@ -161,6 +161,24 @@ class AirPath:
             self.steps.append(Step("x_o", name, formula, numbers, share, RATIO, DEFINITION))
         return share
 
+    @property
+    def exhausted(self) -> tuple[State, str]:
+        """The air that leaves through the recovery, with its letter; cooling and heating know."""
+        raise NotImplementedError
+
+    @figure
+    def exhaust_mass(self) -> float:
+        """Dry air that leaves through the recovery; as much as enters where not given."""
+        self.unit.refuse_bad(Unit.exhaust_airflow)
+        airflow = self.unit.exhaust_airflow
+        if airflow is None:
+            return self.outdoor_mass
+        volume = None
+        if self.basis == "actual":
+            air, letter = self.exhausted
+            volume = air.specific_volume(self.lettered(letter))
+        return self.mass_of(airflow, volume, self.lettered("x", a=self.exhausted[1]))
+
     def mass_of(self, airflow: float, volume: float | None, steps: Steps | None = None) -> float:
         """Return the dry air in a volume flow [lb/h | kg/s].
 

@@ -54,17 +54,10 @@ class CoilAir(AirPath):
             return humid_air(unit, site, Unit.return_db, Unit.return_rh, Unit.return_wb, steps)
         return self.room.heated_to(unit.need(Unit.return_db), self.lettered("ret", i="r"))
 
-    @figure
-    def exhaust_mass(self) -> float:
-        """Dry air that leaves through the recovery; as much as enters where not given."""
-        self.unit.refuse_bad(Unit.exhaust_airflow)
-        airflow = self.unit.exhaust_airflow
-        if airflow is None:
-            return self.outdoor_mass
-        volume = None
-        if self.basis == "actual":
-            volume = self.return_air.specific_volume(self.lettered("ret"))
-        return self.mass_of(airflow, volume, self.lettered("x", a="ret"))
+    @property
+    def exhausted(self) -> tuple[State, str]:
+        """The air that leaves through the recovery, with its letter."""
+        return self.return_air, "ret"
 
     @figure
     def recovered(self) -> State:

@@ -70,17 +70,10 @@ class Heating(AirPath):
         """Outdoor air as it meets the recovery or the return air: past a preheat of its own."""
         return self.preheat_leaving if self.preheats_outdoor else self.outdoor
 
-    @figure
-    def exhaust_mass(self) -> float:
-        """Dry air that leaves through the recovery; as much as enters where not given."""
-        self.unit.refuse_bad(Unit.exhaust_airflow)
-        airflow = self.unit.exhaust_airflow
-        if airflow is None:
-            return self.outdoor_mass
-        volume = None
-        if self.basis == "actual":
-            volume = self.room.specific_volume(self.lettered("r"))
-        return self.mass_of(airflow, volume, self.lettered("x", a="r"))
+    @property
+    def exhausted(self) -> tuple[State, str]:
+        """The air that leaves through the recovery, with its letter."""
+        return self.room, "r"
 
     @figure
     def effectiveness(self) -> Effectiveness:
