@@ -25,6 +25,7 @@ from schedtui.schedule.view import Schedule
 if TYPE_CHECKING:
     from collections.abc import Callable, Collection, Iterable, Sequence
 
+    from schedtui.air.state import Air
     from schedtui.review.check import Check, Faults
     from schedtui.schedule.catalogue.table import Table
     from schedtui.schedule.document import Row
@@ -113,6 +114,32 @@ class _Watch:
         return hashlib.sha256("\n".join(lines).encode()).hexdigest()
 
 
+class _WatchedSite(Site):
+    """A site that looks at its project only when it is asked for what stands there.
+
+    Args:
+        schedule: the schedule, watched.
+    """
+
+    __slots__ = ("_schedule",)
+    _schedule: Schedule
+
+    def __init__(self, schedule: Schedule) -> None:
+        object.__setattr__(self, "_schedule", schedule)
+        object.__setattr__(self, "system", schedule.system)
+        object.__setattr__(self, "limits", schedule.limits)
+
+    @property
+    def air(self) -> Air:
+        """The air at the site."""
+        return site_of(self._schedule).air
+
+    @property
+    def airflow_basis(self) -> str:
+        """What airflows mean unless a unit says otherwise."""
+        return self._schedule.project.airflow_basis
+
+
 def basis(finding: Finding, schedule: Schedule) -> str:
     """Return the digest of every input that a finding is found in.
 
@@ -124,7 +151,10 @@ def basis(finding: Finding, schedule: Schedule) -> str:
     subject = finding.subject
     watched = watch.watched(subject.row_id if subject.table == "unit" else None)
     check = registered()[finding.check]
-    for ask in _asks(check, finding, watched):
+    if check.reads_digits:  # what the judge reads besides
+        _ = watched.limits.rounding, watched.limits.rounding_cap
+    at = next((one.row_id for one in schedule.conditions if one.name == finding.condition), None)
+    for ask in _asks(check, finding, watched, at):
         try:
             for _ in ask():
                 pass
@@ -133,11 +163,13 @@ def basis(finding: Finding, schedule: Schedule) -> str:
     return watch.digest()
 
 
-def _asks(check: Check, finding: Finding, schedule: Schedule) -> Iterator[Callable[[], Faults]]:
+def _asks(
+    check: Check, finding: Finding, schedule: Schedule, at: int | None
+) -> Iterator[Callable[[], Faults]]:
     """Return the ways a check comes to a finding, over a watched schedule."""
-    site, subject = site_of(schedule), finding.subject
+    site, subject = _WatchedSite(schedule), finding.subject
     if subject.table == "unit":
-        yield from _asks_of_unit(check, finding, schedule, site)
+        yield from _asks_of_unit(check, finding, schedule, site, at)
     elif subject.table == "plant" and (in_plant := check.plant) is not None:
         labels = schedule.labels()
         units = [(labels[one.row_id], UnitCase(one, schedule, site)) for one in schedule.units]
@@ -151,13 +183,13 @@ def _asks(check: Check, finding: Finding, schedule: Schedule) -> Iterator[Callab
 
 
 def _asks_of_unit(
-    check: Check, finding: Finding, schedule: Schedule, site: Site
+    check: Check, finding: Finding, schedule: Schedule, site: Site, at: int | None
 ) -> Iterator[Callable[[], Faults]]:
     unit = next(one for one in schedule.units if one.row_id == finding.subject.row_id)
-    plain = next(
-        (at for at in schedule.conditions if at.own["name"].text == finding.condition), None
-    ) if finding.condition else None  # fmt: skip
     case = UnitCase(unit, schedule, site)
+    plain = next((one for one in schedule.conditions if one.row_id == at), None)
+    if plain is None and finding.condition:  # a unit of room air, in a file without conditions
+        plain = next(iter(case.conditions), None)
     if (in_unit := check.unit) is not None:
         yield lambda: in_unit(case)
     if (at_cooling := check.cooling) is not None and plain is not None:

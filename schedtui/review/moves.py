@@ -79,3 +79,11 @@ GUARDED: Mapping[str, tuple[str, ...]] = {
     "heat_lwt": ("water-temperatures",),
     "heat_ewt": ("water-temperatures", "fluid-range"),
 }  # fmt: skip
+
+# Moves that a room pays for, which are not made where it is short as it is.
+PAID_BY: Mapping[tuple[str, int], tuple[str, ...]] = {
+    ("cool_lat_wb", UP): ("room-latent-short",),
+    ("cool_lat_db", UP): ("room-sensible-short",),
+    ("supply_airflow", DOWN): ("room-sensible-short", "room-latent-short", "room-heat-short"),
+    ("heat_lat_db", DOWN): ("room-heat-short",),
+}

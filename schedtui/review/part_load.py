@@ -56,11 +56,13 @@ class Settings:
 def cooling_at(unit: Unit, condition: Condition, site: Site) -> Cooling:
     """Return a unit at a cooling condition, shedding load where the condition has less of it."""
     full = condition.sensible_load >= _FULL and condition.latent_load >= _FULL
+    if full:
+        return Cooling(unit, condition, site)
     states_loads = unit.stated(
         "room_sensible", "room_latent", "room_db", "cool_lat_db", "cool_lat_wb"
     )
     states_humidity = unit.stated("room_rh") or unit.stated("room_wb")
-    if full or not (states_loads and states_humidity):
+    if not (states_loads and states_humidity):
         return Cooling(unit, condition, site)
     return PartLoad(unit, condition, site)
 
@@ -71,7 +73,7 @@ class PartLoad(Cooling):
     def tried(self, settings: Settings) -> PartLoad:
         """Return the same unit and condition with its control set so."""
         trial = PartLoad(self.unit, self.condition, self.site)
-        trial.__dict__["_known"] = {"settings": settings}
+        trial.__dict__["_known"] = {"settings": settings, "design": self.design}
         return trial
 
     @figure
@@ -120,7 +122,10 @@ class PartLoad(Cooling):
     @figure
     def bypass_share(self) -> float:
         """Share of the supply air that goes around the coil, by mass."""
-        return self.settings.bypass
+        share = self.settings.bypass
+        if self.unit.bypass_source == "return":
+            share = min(share, 1 - self.outdoor_fraction)  # no more returns of the air that is left
+        return share
 
     @figure
     def supply_mass(self) -> float:

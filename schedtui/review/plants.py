@@ -5,7 +5,7 @@ A sum is coincident: every unit at the same condition. Judges nothing.
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING
 
 from schedtui.air.fluid import flow_for
@@ -83,9 +83,9 @@ class PlantCase:
 
     def of(self, plant: Plant) -> PlantCase:
         """Return another reading of the plant with what this one feeds."""
-        other = PlantCase(plant, self.schedule, self.site, self._units)
-        other.__dict__["_known"] = {"feeds": self.feeds}
-        return other
+        plants = tuple(plant if one is self.plant else one for one in self.schedule.plants)
+        # A unit on two plants is shared by their capacities: what feeds it hangs on this one's.
+        return PlantCase(plant, replace(self.schedule, plants=plants), self.site, self._units)
 
     @property
     def name(self) -> str:

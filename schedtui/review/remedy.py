@@ -16,15 +16,16 @@ from schedtui.errors import Absent
 from schedtui.review.case import UnitCase
 from schedtui.review.finding import Severity
 from schedtui.review.judge import judge_unit, still_found
-from schedtui.review.moves import GUARDED, MOVES, PAIRS, UP
+from schedtui.review.moves import DOWN, GUARDED, MOVES, PAID_BY, PAIRS, UP
 from schedtui.review.registry import registered
 from schedtui.schedule.catalogue.kinds import NumberKind
 from schedtui.schedule.catalogue.plant import Plant
 from schedtui.schedule.catalogue.unit import Unit
+from schedtui.schedule.typed import Typed
 from schedtui.units import decimals, format_number
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterable, Mapping
+    from collections.abc import Callable, Iterable
 
     from schedtui.review.finding import Finding
     from schedtui.review.reviewed import PlantReview, UnitReview
@@ -173,12 +174,17 @@ def _last_allowed(grid: _Grid, beyond: int, allowed: Callable[[float], bool]) ->
     return low
 
 
-def _allowed(unit: Unit, field: Field[object], value: float) -> bool:
+def _allowed(unit: Unit, field: Field[object], value: float, way: int) -> bool:
     """Tell whether a number may be moved so far: within its range, outdoor air as required."""
     kind = field.kind
     assert isinstance(kind, NumberKind)  # noqa: S101  only numbers are moved
     if not (kind.ip if unit.system == "IP" else kind.si).holds(value):
         return False
+    # A wet bulb above its dry bulb is no air: the search ends where the two are one.
+    if field.key == "cool_lat_db" and way == DOWN:
+        return value >= (unit.cool_lat_wb or value)
+    if way == UP:
+        return field.key != "cool_lat_wb" or value <= (unit.cool_lat_db or value)
     if field.key == "outdoor_airflow":
         return value >= (unit.outdoor_required or 0.0)
     return not (field.key == "supply_airflow" and value < (unit.outdoor_airflow or 0.0))
@@ -211,37 +217,58 @@ class _Solving:
         cell = unit.typed(key)
         if cell is None or not isinstance(cell.value, float) or not self._is_to_blame(key):
             return None
+        if self._is_paid_already(key, way):
+            return None
         digits = decimals(cell.text)
         if digits is None:
             digits = field.quantity.digits(unit.system) if field.quantity else 0
         grid = _Grid(cell.value, digits, way)
 
+        measure = field.quantity.unit(unit.system) if field.quantity else ""
+        aims = (self.finding.check, *(guards if others else ()))
+
         def allowed(value: float) -> bool:
-            return _allowed(unit, field, value)
+            return _allowed(unit, field, value, way)
+
+        def tried(change: Change) -> UnitCase:
+            return self._tried((*others, change))
 
         def clears(value: float) -> bool:
-            case = self._tried({**_values(others), key: value})
-            return allowed(value) and self._is_clear(case, guards)
+            change = Change(key, format_number(value, digits), measure)
+            return allowed(value) and self._is_clear(tried(change), aims)
 
         steps = _first_clear(grid, clears, allowed)
         if steps is None:
             return None
-        measure = field.quantity.unit(unit.system) if field.quantity else ""
-        return Change(key, grid.text(steps), measure)
+        change = Change(key, grid.text(steps), measure)
+        # What gives way does so the more the further a number is moved, so the nearest value that
+        # clears is the one to ask: a search for both at once leaps over what lies between.
+        return change if self._is_clear(tried(change), guards) else None
 
     def _is_to_blame(self, key: str) -> bool:
         """Tell whether a number is of the part that the finding is about: one of two motors."""
         part = next((part for part in _PARTS if self.finding.fields[0].startswith(part)), None)
-        return key.startswith(part) if part else not key.startswith(_PARTS)
+        return not key.startswith(_PARTS) or (part is not None and key.startswith(part))
 
-    def _tried(self, values: Mapping[str, float]) -> UnitCase:
-        case = self.reviewed.case
-        return UnitCase(case.unit.replaced(values), case.schedule, case.site)
+    def _tried(self, changes: tuple[Change, ...]) -> UnitCase:
+        case, unit = self.reviewed.case, self.reviewed.unit
+        cells = {one.field: Typed(one.text, one.value, one.text) for one in changes}
+        row = Unit(unit.row_id, unit.system, {**unit.own, **cells}, unit.inherited)
+        return UnitCase(row, case.schedule, case.site)
 
-    def _is_clear(self, case: UnitCase, guards: Iterable[str]) -> bool:
+    def _is_clear(self, case: UnitCase, names: Iterable[str]) -> bool:
         """Tell whether the finding is gone, and nothing that was fine has given way."""
-        return not still_found(self.finding.check, case) and not any(
-            still_found(name, case) for name in guards if not still_found(name, self.reviewed.case)
+        return not any(
+            still_found(name, case)
+            for name in names
+            if name == self.finding.check or not still_found(name, self.reviewed.case)
+        )
+
+    def _is_paid_already(self, key: str, way: int) -> bool:
+        """Tell whether a room that would pay for a move is short as it is."""
+        rooms = PAID_BY.get((key, way), ())
+        return any(
+            one.check in rooms and one.severity is Severity.SHORT for one in self.reviewed.own
         )
 
     def pairs(self) -> list[tuple[Change, ...]]:
@@ -263,7 +290,7 @@ class _Solving:
     def remedy(self, changes: tuple[Change, ...]) -> Remedy:
         """Return changes as a remedy, with what turns worse by them."""
         before = _worst(self.reviewed.own)
-        after = _worst(judge_unit(self._tried(_values(changes)), self.reviewed.label))
+        after = _worst(judge_unit(self._tried(changes), self.reviewed.label))
         worsens = tuple(
             name
             for name, severity in after.items()
@@ -273,10 +300,6 @@ class _Solving:
 
 
 _PARTS = ("preheat_", "return_fan_")
-
-
-def _values(changes: tuple[Change, ...]) -> dict[str, float]:
-    return {change.field: change.value for change in changes}
 
 
 def _worst(findings: tuple[Finding, ...]) -> dict[str, int]:

@@ -1,5 +1,9 @@
 """Figures: computed when asked, once, absences included."""
 
+import contextlib
+import gc
+import weakref
+
 import pytest
 
 from schedtui.errors import Absent, AirError
@@ -107,3 +111,22 @@ def test_known_does_not_hide_other_faults():
 
 def test_on_the_class_a_figure_is_itself_with_its_docstring():
     assert Evaluation.load.__doc__ == "The load."
+
+
+class Held:
+    """Something that whoever asks holds on to."""
+
+
+def test_an_absence_that_is_remembered_keeps_nothing_of_whoever_asked():
+    evaluation = Evaluation()
+
+    def ask():
+        held = Held()
+        with contextlib.suppress(Absent):
+            evaluation.behind_the_gap  # noqa: B018  asked for its absence
+        return weakref.ref(held)
+
+    first, again = ask(), ask()
+    gc.collect()
+    assert first() is None
+    assert again() is None
