@@ -10,9 +10,9 @@ from pathlib import Path
 
 import pytest
 
-from schedtui import files
 from schedtui.errors import FileChanged, FileError
-from schedtui.files import LARGEST, read_text, write_text
+from schedtui.files import read_text, reading, sweep, write_text, writing
+from schedtui.files.reading import LARGEST
 
 TEXT = "\ufefftitle = 'é'\r\n\nlast = 1\n"
 
@@ -45,7 +45,7 @@ def test_what_is_no_regular_file_is_refused_and_not_opened(tmp_path, monkeypatch
         monkeypatch.chdir(tmp_path)
         listening.bind("socket")
         (tmp_path / "link").symlink_to(pipe)
-        monkeypatch.setattr(files.os, "open", None)  # calling it would be a TypeError
+        monkeypatch.setattr(os, "open", None)  # calling it would be a TypeError
         for path, kind in (
             (pipe, "pipe"),
             (tmp_path / "link", "pipe"),
@@ -62,7 +62,7 @@ def test_a_pipe_that_takes_a_files_place_is_not_waited_for(tmp_path, monkeypatch
     path.write_text("a = 1\n")
     os.mkfifo(pipe)
     regular = path.stat()
-    monkeypatch.setattr(files.os, "stat", lambda _: regular)
+    monkeypatch.setattr(os, "stat", lambda _: regular)
     with pytest.raises(FileError, match="is a pipe"):
         read_text(pipe)
 
@@ -94,8 +94,8 @@ def test_a_file_that_grows_while_it_is_read_is_refused(tmp_path, monkeypatch):
     path = tmp_path / "a.toml"
     path.write_bytes(b"#" * 11)
     small = path.stat()
-    monkeypatch.setattr(files, "LARGEST", 10)
-    monkeypatch.setattr(files, "_refuse_irregular", lambda *_: small)
+    monkeypatch.setattr(reading, "LARGEST", 10)
+    monkeypatch.setattr(reading, "refuse_irregular", lambda *_: small)
     with pytest.raises(FileError, match="larger than"):
         read_text(path)
 
@@ -167,7 +167,7 @@ def test_a_new_file_does_not_take_an_old_ones_place_unless_told_to(tmp_path):
 def test_a_file_that_comes_to_be_at_the_last_moment_is_kept(tmp_path, monkeypatch):
     path = tmp_path / "a.toml"
     path.write_text("a = 1\n")
-    monkeypatch.setattr(files, "_present", lambda _: None)
+    monkeypatch.setattr(writing, "_present", lambda _: None)
     with pytest.raises(FileError, match="exists already"):
         write_text(path, "a = 2\n", None)
     assert path.read_text() == "a = 1\n"
@@ -187,7 +187,7 @@ def test_the_mode_is_kept_and_a_new_file_has_that_of_any_new_file(tmp_path):
 def test_a_file_marked_read_only_is_refused(tmp_path, monkeypatch):
     path = tmp_path / "a.toml"
     stamp = write_text(path, "a = 1\n", None)
-    monkeypatch.setattr(files.os, "access", lambda *_: False)  # the superuser may write anything
+    monkeypatch.setattr(os, "access", lambda *_: False)  # the superuser may write anything
     with pytest.raises(FileError, match="read-only"):
         write_text(path, "a = 2\n", stamp)
 
@@ -199,7 +199,7 @@ def test_a_writing_that_fails_leaves_the_old_file_and_nothing_else(tmp_path, mon
 
     path = tmp_path / "a.toml"
     stamp = write_text(path, "a = 1\n", None)
-    monkeypatch.setattr(files.os, failing, fail)
+    monkeypatch.setattr(os, failing, fail)
     with pytest.raises(FileError, match=r"a\.toml cannot be written: the disk is full"):
         write_text(path, "a = 2\n", stamp)
     monkeypatch.undo()
@@ -212,7 +212,7 @@ def test_the_content_is_on_the_disk_before_the_name_is(tmp_path, monkeypatch):
     for name in ("fsync", "replace"):
         real = getattr(os, name)
         monkeypatch.setattr(
-            files.os, name, lambda *a, name=name, real=real: calls.append(name) or real(*a)
+            os, name, lambda *a, name=name, real=real: calls.append(name) or real(*a)
         )
     path = tmp_path / "a.toml"
     path.write_text("a = 1\n")
@@ -230,3 +230,16 @@ def test_what_cannot_be_written_is_named(tmp_path):
         write_text(tmp_path / "a.toml", "\ud800", None)
     with pytest.raises(FileError, match="no name of a file"):
         write_text(tmp_path / "a\x00", "", None)
+
+
+def test_what_a_killed_writing_left_is_swept_and_nothing_else(tmp_path):
+    path = tmp_path / "works.toml"
+    stays = ["works.toml", ".works.toml.0123456789abcdeX", ".other.toml.0123456789abcdef"]
+    for name in (*stays, ".works.toml.0123456789abcdef"):
+        (tmp_path / name).touch()
+        os.utime(tmp_path / name, (100, 100))
+    young = tmp_path / ".works.toml.fedcba9876543210"
+    young.touch()
+    sweep(path, 200)
+    assert {one.name for one in tmp_path.iterdir()} == {*stays, young.name}
+    sweep(tmp_path / "absent" / "works.toml", 200)

@@ -38,6 +38,7 @@ ACTIONS: tuple[Action, ...] = (
     Action("other_part", "ctrl+w", "ctrl+w", "go from table to pane, and back"),
     Action("enlarge_pane", "ctrl+l", "ctrl+l", "the pane as large as the screen, and back"),
     Action("save", "ctrl+s", "ctrl+s", "save the schedule", overriding=True),
+    Action("save_as", "f11", "F11", "save under another name"),
     Action("leave", "ctrl+q", "ctrl+q", "quit; asks where something is unsaved", overriding=True),
     Action("stay", "ctrl+c", "ctrl+c", "nothing: it does not quit", overriding=True),
     Action("to_table", "escape", "Esc", "from help or pane back to the table"),

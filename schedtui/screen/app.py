@@ -6,9 +6,6 @@ Turns keys into edits of the session and shows what its review then says. Comput
 from __future__ import annotations
 
 import asyncio
-import contextlib
-import signal
-from functools import partial
 from typing import TYPE_CHECKING, Any, ClassVar
 
 from textual.app import App, ComposeResult
@@ -16,13 +13,15 @@ from textual.binding import Binding, BindingType
 from textual.containers import Container
 from textual.screen import ModalScreen
 
-from schedtui.errors import AmountError, FileChanged, SchedtuiError
+from schedtui.errors import AmountError
 from schedtui.screen import hints, looks, seek
 from schedtui.screen.actions import ACTIONS
 from schedtui.screen.around import Around
 from schedtui.screen.bars import HINT_STYLE, Bar
+from schedtui.screen.filing import Filing
 from schedtui.screen.grid import Grid
 from schedtui.screen.question import Answer, Question
+from schedtui.screen.tally import Tally
 from schedtui.screen.terse_update import terse
 from schedtui.screen.unit_table import UnitTable
 
@@ -33,6 +32,8 @@ if TYPE_CHECKING:
     from textual.screen import Screen
 
     from schedtui.screen import said
+    from schedtui.screen.ending import Ending
+    from schedtui.session.history import Done
     from schedtui.session.session import Session
 
 _WIDE = 140  # columns from which the pane stands beside the table
@@ -40,7 +41,7 @@ _LEAST = (60, 16)
 
 _SLICE = 0.008  # s that a key may have to wait while units are being reviewed
 _PAUSE = 0.001  # s in between, for keys and painting
-_SAVE, _DROP, _STAY, _OVER = "save", "drop", "stay", "over"
+_DROP, _STAY = "drop", "stay"
 _STAY_ANSWER = Answer("escape", "Esc", "stay", _STAY)
 
 
@@ -49,6 +50,7 @@ class ScheduleApp(App[None]):
 
     Args:
         session: the schedule.
+        ending: what tells it to end; nothing does if not given.
     """
 
     ENABLE_COMMAND_PALETTE = False
@@ -59,12 +61,16 @@ class ScheduleApp(App[None]):
         for action in ACTIONS
     ]
 
-    def __init__(self, session: Session) -> None:
+    def __init__(self, session: Session, ending: Ending | None = None) -> None:
         super().__init__()
         self._session = session
+        self._ending = ending
         self._table = UnitTable(session.review)
         self._grid = Grid(self._table, empty="No unit yet.", tell=self._hear, id="units")
         self._around = Around(session, self._table, self._grid)
+        self._filing = Filing(self, session, self)
+        self._around.marks = lambda: self._filing.marks
+        self._settling = False
         self._begun_at: tuple[int, str] | None = None
 
     def get_theme_variable_defaults(self) -> dict[str, str]:
@@ -107,6 +113,7 @@ class ScheduleApp(App[None]):
             self._around.hint(f"{len(problems)} to mend in the file, the first in {first}")
         else:
             self._around.show_hint()
+        self._filing.begin()
 
     def _go_on(self) -> None:
         """Review some of the units that wait, then look after the keys again."""
@@ -118,10 +125,41 @@ class ScheduleApp(App[None]):
             self._begin()
 
     def _end_when_told(self) -> None:
-        """Give the terminal back when the system asks the program to end."""
-        with contextlib.suppress(NotImplementedError, RuntimeError, ValueError):
-            end = partial(self.exit, return_code=128 + signal.SIGTERM)
-            asyncio.get_running_loop().add_signal_handler(signal.SIGTERM, end)
+        """Leave, and give the terminal back, when the system asks the program to end."""
+        if self._ending is not None:
+            loop = asyncio.get_running_loop()
+            self._ending.by(lambda status: loop.call_soon_threadsafe(self._leave_with, status))
+
+    def _leave_with(self, status: int) -> None:
+        self.exit(return_code=status)
+
+    # -- what filing needs -------------------------------------------------------------------
+
+    def editing(self) -> bool:
+        """Tell whether a cell is being edited."""
+        return self._grid.editing is not None
+
+    def say(self, words: str) -> None:
+        """Say something in the hint line."""
+        self._around.hint(words)
+
+    def show_title(self) -> None:
+        """Show the title with its marks."""
+        self._around.show_title()
+
+    def point_at(self, step: Done) -> None:
+        """Go to the cell that a step was about."""
+        for row_id, key in self._session.cells_of(step):
+            if key in self._column_keys:
+                self._grid.move_to(row_id, key)
+
+    def show_anew(self) -> None:
+        """Show a schedule of which anything may be another."""
+        self._table.start_over(self._session.review)
+        self._around.tally = Tally(self._session.review)
+        self._grid.source_changed(columns=True)
+        self._around.show_title()
+        self._around.show_pane()
 
     def _begin(self) -> None:
         """Put the cursor on the worst that was found, if anything was."""
@@ -156,6 +194,8 @@ class ScheduleApp(App[None]):
             case Grid.CursorMoved():
                 self._around.show_pane()
                 self._around.show_hint()
+                if self._grid.editing is None:
+                    self._filing.look()
             case _:
                 self._around.show_hint()
 
@@ -214,6 +254,7 @@ class ScheduleApp(App[None]):
         after = self._session.review.units[row_id]
         if changed:
             self._around.answer = hints.answer(after.label, before, after.status)
+        self._around.answer = self._session.kept.trouble() or self._around.answer
         self._show_changes(changed)
 
     def _show_changes(self, changed: frozenset[int]) -> None:
@@ -221,6 +262,15 @@ class ScheduleApp(App[None]):
         self._around.tally.show(self._session.review, changed)
         self._grid.source_changed(rows=changed, columns=columns)
         self._around.show_title()
+        due = self._session.kept.due()
+        if due is not None and not self._settling:
+            self._settling = True
+            self.set_timer(max(due, _PAUSE), self._settle)
+
+    def _settle(self) -> None:
+        """Have the edits on the disk, when nobody waits for a key."""
+        self._settling = False
+        self._session.kept.settle()
 
     # -- actions ---------------------------------------------------------------------------
 
@@ -251,24 +301,11 @@ class ScheduleApp(App[None]):
 
     def action_save(self) -> None:
         """Save, or say why that is not possible."""
-        self._save()
+        self._filing.save()
 
-    def _save(self, *, over: bool = False) -> bool:
-        if self._grid.editing is not None:
-            self._around.hint("Enter or Esc first: a cell is being edited")
-            return False
-        try:
-            self._session.save(over=over)
-        except FileChanged as error:
-            overwrite = Answer("o", "o", "write over it what is here", _OVER)
-            self.push_screen(Question(f"{error}.", (_STAY_ANSWER, overwrite)), self._answered)
-            return False
-        except SchedtuiError as error:
-            self._around.hint(f"Not saved: {error}")
-            return False
-        self._around.show_title()
-        self._around.hint(f"Saved {self._session.path}")
-        return True
+    def action_save_as(self) -> None:
+        """Save under another name."""
+        self._filing.save_as()
 
     def action_undo(self) -> None:
         """Take the last step back."""
@@ -290,9 +327,7 @@ class ScheduleApp(App[None]):
             return
         step, changed = turned
         self._show_changes(changed)
-        for row_id, key in self._session.cells_of(step):
-            if key in self._column_keys:
-                self._grid.move_to(row_id, key)
+        self.point_at(step)
         self._around.show_pane()
         self._around.hint(f"{done}: {step.name}")
 
@@ -349,19 +384,4 @@ class ScheduleApp(App[None]):
 
     def action_leave(self) -> None:
         """Quit, asking first where something is unsaved."""
-        if not self._session.unsaved:
-            self.exit()
-            return
-        answers = (
-            Answer("enter", "Enter", "save and quit", _SAVE),
-            Answer("d", "d", "quit and drop the changes", _DROP),
-            _STAY_ANSWER,
-        )
-        name = self._session.path.name
-        self.push_screen(Question(f"{name} has unsaved changes.", answers), self._answered)
-
-    def _answered(self, answer: str | None) -> None:
-        if answer == _OVER:
-            self._save(over=True)
-        elif answer == _DROP or (answer == _SAVE and self._save()):
-            self.exit()
+        self._filing.leave()

@@ -10,6 +10,7 @@ from typing import TYPE_CHECKING
 from schedtui.report.findings import short_site
 from schedtui.report.page import Page
 from schedtui.report.unit import unit_air_page, unit_findings_page
+from schedtui.report.working import unit_working_page
 from schedtui.screen import actions, hints
 from schedtui.screen.bars import HINT_STYLE, TITLE_STYLE, Bar, hint_line, title_line
 from schedtui.screen.detail_pane import DetailPane
@@ -27,6 +28,7 @@ if TYPE_CHECKING:
 _PAGES: tuple[tuple[str, Callable[[UnitReview], Page]], ...] = (
     ("Findings", unit_findings_page),
     ("Air", unit_air_page),
+    ("Working", unit_working_page),
 )
 _HELP = "Help"
 
@@ -50,6 +52,7 @@ class Around:
         self.pane = DetailPane([name for name, _ in _PAGES], id="pane")
         self.bar = Bar(HINT_STYLE, id="hint")
         self.helping = False
+        self.marks: Callable[[], str] = lambda: ""  # what the title says besides the file's name
         self.answer = ""  # what an edit has done, to be said once the cursor has come to rest
 
     @property
@@ -61,7 +64,7 @@ class Around:
     def show_title(self) -> None:
         """Show the file, the project, the site, and the counts."""
         session = self._session
-        file = f"{session.path.name} *unsaved*" if session.unsaved else session.path.name
+        file = session.path.name + self.marks()
         project = session.schedule.project.title or "No title"
         site = short_site(session.review).replace("  ", " ")
         counts: tuple[str, ...] = self.tally.texts

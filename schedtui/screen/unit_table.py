@@ -62,6 +62,16 @@ class UnitTable:
         self._measure(review.units)
         self.columns: Sequence[Column] = tuple(self._made_columns())
 
+    def start_over(self, review: Review) -> None:
+        """Show a review of which anything may be another: rows, columns, unit system."""
+        self._review = review
+        self._widths.clear()
+        self.row_keys = tuple(review.units)
+        for row_id in review.units:
+            self._versions[row_id] = self.version(row_id) + 1
+        self._measure(review.units)
+        self.columns = tuple(self._made_columns())
+
     def show(self, review: Review, changed: frozenset[int]) -> bool:
         """Show another review of the same schedule, and tell whether the columns are others.
 

@@ -8,17 +8,18 @@ from __future__ import annotations
 import math
 from typing import TYPE_CHECKING
 
-from schedtui.errors import AmountError
-from schedtui.files import Stamp, read_text, write_text
+from schedtui.errors import AmountError, FileError
+from schedtui.files import Stamp, digest_of, read_text, write_text
 from schedtui.review.reviewed import Review, review
 from schedtui.schedule.catalogue.column import own_field
 from schedtui.schedule.catalogue.unit import Unit
-from schedtui.schedule.edit import Edit, SetCell
+from schedtui.schedule.edit import Edit, SetCell, Together
 from schedtui.schedule.load import CATALOGUES, load
 from schedtui.schedule.save import saved, source_text
 from schedtui.schedule.view import Schedule, view
-from schedtui.session import slices
+from schedtui.session import kept, naming, on_disk, slices
 from schedtui.session.history import Done, History
+from schedtui.session.recovery import replayed
 from schedtui.units import read_amount
 
 if TYPE_CHECKING:
@@ -28,6 +29,11 @@ if TYPE_CHECKING:
     from schedtui.schedule.catalogue.field import Field
     from schedtui.schedule.document import Document
     from schedtui.schedule.typed import Typed
+    from schedtui.session.comparison import Comparison
+    from schedtui.session.journal import Found
+    from schedtui.session.keeping import Keeping
+
+_LOOKS_EVERY = 1.0  # s between two looks at whether the file is another
 
 
 class Session:
@@ -38,10 +44,17 @@ class Session:
         document: what was read from it.
         stamp: what the file was when it was read.
         at_once: how many units are reviewed before it is open; the others wait for `go_on`.
+        keeping: where its journal is and whose session it is; without, neither a journal nor a
+            lock is made.
     """
 
     def __init__(
-        self, path: Path, document: Document, stamp: Stamp, at_once: float = math.inf
+        self,
+        path: Path,
+        document: Document,
+        stamp: Stamp,
+        at_once: float = math.inf,
+        keeping: Keeping | None = None,
     ) -> None:
         self.path = path
         self.history = History()
@@ -50,21 +63,29 @@ class Session:
         self._schedule = view(document)
         self._review, self._waiting = slices.begun(self._schedule, at_once)
         self._saved_at: Done | None = None
+        self._clock = keeping.clock if keeping else None
+        self._looked_at = -math.inf
+        self.kept = kept.Kept(keeping, path, stamp.digest)
+        self.mended = False
 
     @classmethod
-    def open(cls, path: Path, at_once: float = math.inf) -> Session:
+    def open(cls, path: Path, at_once: float = math.inf, keeping: Keeping | None = None) -> Session:
         """Open a file; cells that cannot be read do not hinder it.
 
         Args:
             path: the file.
             at_once: how many units are reviewed now; the others wait for `go_on`.
+            keeping: where its journal is and whose session it is; none if not given.
 
         Raises:
             FileError: it cannot be read.
             ScheduleError: it is no schedule at all.
         """
+        mended = kept.mended(keeping, path)
         read = read_text(path)
-        return cls(path, load(read.text, str(path)), read.stamp, at_once)
+        session = cls(path, load(read.text, str(path)), read.stamp, at_once, keeping)
+        session.mended = mended
+        return session
 
     @property
     def document(self) -> Document:
@@ -155,7 +176,8 @@ class Session:
         before = self._document.row(table, row_id).cells.get(key)
         if cell == before:
             return frozenset()
-        name = self._name(table, row_id, key, before, cell)
+        subject = naming.subject(self._review, table, row_id)
+        name = naming.set_cell(subject, self.field(table, key).label, before, cell)
         return self.do(SetCell(table, row_id, key, cell), name)
 
     def do(self, edit: Edit, name: str) -> frozenset[int]:
@@ -168,7 +190,10 @@ class Session:
         Returns:
             Row ids of the units whose review is another now.
         """
-        return self._become(self.history.do(self._document, edit, name))
+        plain = self.kept.plain(self._document, edit)
+        document = self.history.do(self._document, edit, name)
+        self.kept.note("do", plain, self.history.done[-1])  # before anybody sees what it makes
+        return self._become(document)
 
     def undo(self) -> tuple[Done, frozenset[int]] | None:
         """Take the last step back; None where there is none.
@@ -176,7 +201,7 @@ class Session:
         Returns:
             The step, and the row ids of the units whose review is another now.
         """
-        return self._go(self.history.undo)
+        return self._go("undo", self.history.undo)
 
     def redo(self) -> tuple[Done, frozenset[int]] | None:
         """Take a step again that was taken back; None where there is none.
@@ -184,7 +209,7 @@ class Session:
         Returns:
             The step, and the row ids of the units whose review is another now.
         """
-        return self._go(self.history.redo)
+        return self._go("redo", self.history.redo)
 
     def without_default(self, row_id: int, key: str) -> frozenset[int]:
         """Do without the default of a key in one unit.
@@ -200,8 +225,9 @@ class Session:
         keys = before.value if before is not None and isinstance(before.value, tuple) else ()
         field = self.field("unit", Unit.without.key)
         cell = field.kind.enter(", ".join((*keys, key)), self._document.system)
-        label = self.field("unit", key).label
-        name = f"{self._subject('unit', row_id)} {_lower(label)} without the default"
+        subject = naming.subject(self._review, "unit", row_id)
+        label = naming.in_sentence(self.field("unit", key).label)
+        name = f"{subject} {label} without the default"
         return self.do(SetCell("unit", row_id, Unit.without.key, cell), name)
 
     def cells_of(self, step: Done) -> tuple[tuple[int, str], ...]:
@@ -211,30 +237,146 @@ class Session:
             return ()
         return ((edit.row_id, edit.key),) if edit.row_id in self._review.units else ()
 
-    def save(self, *, over: bool = False) -> None:
+    # -- the file ----------------------------------------------------------------------------
+
+    def save(self, *, over: Comparison | None = None) -> None:
         """Write the document to its file, whole or not at all.
 
         Args:
-            over: whether a file that somebody else has changed is written over.
+            over: what the file on the disk is known to be, where that is to be written over.
 
         Raises:
             FileError: the file cannot be written; it is as it was, and so are the edits.
             FileChanged: the file is no longer what was read.
             SpliceError: the edits cannot be written without touching something else.
         """
+        self._save(self.path, self._stamp if over is None else over.stamp)
+
+    def save_as(self, path: Path) -> None:
+        """Write the document to another file, which is the open one from then on.
+
+        Args:
+            path: a file that is not there yet.
+
+        Raises:
+            FileError: it is there already, or cannot be written.
+            SpliceError: the edits cannot be written without touching something else.
+        """
+        self._save(path, None)
+
+    def _save(self, path: Path, expected: Stamp | None) -> None:
         text = source_text(self._document)
         document = saved(self._document, text)
-        self._stamp = write_text(self.path, text, self._stamp, replace=over)
+        self.kept.saving(digest_of(text) if path == self.path else None)
+        self._stamp = write_text(path, text, expected, copies=self.kept.copies)
+        self.path = path
+        self.kept.saved(path, self._stamp.digest)
         self._become(document)
         self._saved_at = self.history.last
 
+    def changed_on_disk(self, *, at_once: bool = False) -> bool:
+        """Tell whether the file on the disk has another content than was read or saved.
+
+        Args:
+            at_once: whether to look now, however short ago the last look was.
+        """
+        now = self._clock() if self._clock else math.inf
+        if not at_once and now - self._looked_at < _LOOKS_EVERY:
+            return False
+        self._looked_at = now
+        found = on_disk.unchanged(self.path, self._stamp)
+        self._stamp = found or self._stamp
+        return found is None
+
+    def compare(self) -> Comparison:
+        """Hold the file on the disk against what is here."""
+        return on_disk.comparison(self.path, self._document)
+
+    def take_disk(self, comparison: Comparison) -> frozenset[int]:
+        """Go on with what is on the disk; what was done here and not saved is set aside.
+
+        Args:
+            comparison: what was found on the disk, which can be opened.
+
+        Returns:
+            Row ids of the units whose review is another now.
+        """
+        return self._take_over(comparison, (), keep=self.unsaved)
+
+    def merge(self, comparison: Comparison) -> frozenset[int]:
+        """Go on with what is on the disk and what was done here; nothing is saved by it.
+
+        Args:
+            comparison: what was found on the disk, with the edits that were made here.
+
+        Returns:
+            Row ids of the units whose review is another now.
+        """
+        return self._take_over(comparison, comparison.edits or (), keep=False)
+
+    def _take_over(
+        self, comparison: Comparison, edits: tuple[Edit, ...], *, keep: bool
+    ) -> frozenset[int]:
+        theirs, stamp = comparison.theirs, comparison.stamp
+        if theirs is None or stamp is None:
+            raise FileError("what is on the disk cannot be opened")
+        here = Together(edits)
+        step = Done("what was done here", here, here, self.history.next_number)
+        document, _ = here.apply(theirs)
+        self.kept.begin_anew(
+            stamp.digest, self.kept.plain(theirs, here) if edits else None, step, keep=keep
+        )
+        if (keep and not edits) or not self.history.knows(self._document, document):
+            self.history = History(next_number=step.number)
+            if edits:
+                document = self.history.do(theirs, here, step.name, step.number)
+            self._saved_at = None
+        elif not edits:
+            self._saved_at = self.history.last
+        self.history.next_number = step.number + 1
+        self._stamp = stamp
+        return self._become(document)
+
+    # -- what must outlive it ----------------------------------------------------------------
+
+    @property
+    def offered(self) -> Found | None:
+        """The journal of an ended session whose edits can be brought back, the last one."""
+        fitting = (one for one in self.kept.left if one.fits(self._stamp.digest))
+        return None if self.unsaved else next(fitting, None)
+
+    def bring_back(self, found: Found) -> frozenset[int]:
+        """Take the edits again that an ended session has left, and go on with its journal.
+
+        Returns:
+            Row ids of the units whose review is another now.
+
+        Raises:
+            FileError: they cannot be read; they are kept where they are.
+        """
+        document, history = replayed(self._document, found.edits())
+        self.history = history
+        self.kept.adopt(found)
+        return self._become(document)
+
+    def close(self, *, keep: bool) -> None:
+        """End the session.
+
+        Args:
+            keep: whether what is unsaved is kept to be offered by the next session.
+        """
+        self.kept.close(keep=keep and self.unsaved)
+
     def _go(
-        self, turn: Callable[[Document], tuple[Document, Done] | None]
+        self, kind: str, turn: Callable[[Document], tuple[Document, Done] | None]
     ) -> tuple[Done, frozenset[int]] | None:
-        turned = turn(self._document)
+        before = self._document
+        turned = turn(before)
         if turned is None:
             return None
         document, step = turned
+        edit = step.inverse if kind == "undo" else step.edit
+        self.kept.note(kind, self.kept.plain(before, edit), step)
         return step, self._become(document)
 
     def _become(self, document: Document) -> frozenset[int]:
@@ -246,20 +388,6 @@ class Session:
         self._waiting = slices.still_waiting(before, self._review, self._waiting)
         return _differing(before, self._review)
 
-    def _name(
-        self, table: str, row_id: int, key: str, before: Typed | None, after: Typed | None
-    ) -> str:
-        label = _lower(self.field(table, key).label)
-        subject = self._subject(table, row_id)
-        old, new = (cell.text if cell else "blank" for cell in (before, after))
-        return f"{subject} {label} {old} → {new}"
-
-    def _subject(self, table: str, row_id: int) -> str:
-        if table == "unit":
-            return self._review.units[row_id].label
-        row = self._document.row(table, row_id)
-        return f"{table} {row.text('name')}".rstrip()
-
 
 def _differing(before: Review, now: Review) -> frozenset[int]:
     """Return the units that are new, evaluated anew, or found otherwise."""
@@ -270,8 +398,3 @@ def _differing(before: Review, now: Review) -> frozenset[int]:
         or old.case is not unit.case
         or old.findings != unit.findings
     )
-
-
-def _lower(label: str) -> str:
-    """Return a field's label as it stands in a sentence."""
-    return label[:1].lower() + label[1:]

@@ -103,12 +103,13 @@ _KEYS = {" ": "space", ".": "full_stop", ",": "comma", "/": "slash", "-": "minus
 def at_desk(tmp_path):
     """Return what runs a scene with the schedule open at a size."""
 
-    def run(scene, size=(80, 24), text=SCHEDULE, at_once=float("inf")):
+    def run(scene, size=(80, 24), text=SCHEDULE, at_once=float("inf"), keeping=None):
         file = tmp_path / "try.toml"
-        file.write_text(text, encoding="utf-8")
+        if text is not None:
+            file.write_text(text, encoding="utf-8")
 
         async def play():
-            app = ScheduleApp(Session.open(file, at_once))
+            app = ScheduleApp(Session.open(file, at_once, keeping))
             async with app.run_test(size=size) as pilot:
                 await pilot.pause()
                 await scene(Desk(app, pilot, file))

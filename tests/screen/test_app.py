@@ -250,24 +250,6 @@ def test_ctrl_c_does_not_quit_even_in_an_edit(at_desk):
     at_desk(scene)
 
 
-def test_a_file_changed_on_disk_is_written_over_only_when_told(at_desk):
-    async def scene(desk):
-        await go_to_total(desk)
-        await desk.type("900")
-        theirs = desk.on_disk.replace("Try Works", "Their Works")
-        desk.file.write_text(theirs, encoding="utf-8")
-        await desk.press("enter", "ctrl+s")
-        assert "has been changed" in " ".join(desk.text.split())
-        await desk.press("escape")
-        assert desk.on_disk == theirs
-        assert "*unsaved*" in desk.title
-        await desk.press("ctrl+s", "o")
-        assert "cool_total = 900" in desk.on_disk
-        assert "unsaved" not in desk.title
-
-    at_desk(scene)
-
-
 def test_help_explains_marks_signs_keys_and_the_place(at_desk):
     async def scene(desk):
         await go_to_total(desk)

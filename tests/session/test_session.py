@@ -206,7 +206,7 @@ def test_a_file_changed_by_somebody_else_is_not_written_over_unasked(session, fi
         session.save()
     assert file.read_text(encoding="utf-8") == theirs
     assert session.unsaved
-    session.save(over=True)
+    session.save(over=session.compare())
     assert "cool_total = 400" in file.read_text(encoding="utf-8")
     assert not session.unsaved
     session.save()  # it is what was written now

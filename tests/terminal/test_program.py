@@ -49,7 +49,7 @@ def file(tmp_path):
 
 def program(file, size=(80, 24), **environment):
     command = [sys.executable, "-m", "schedtui", str(file)]
-    given = {"PYTHONPATH": str(ROOT), **environment}
+    given = {"PYTHONPATH": str(ROOT), "XDG_STATE_HOME": str(file.parent / "state"), **environment}
     return Terminal(command, *size, given)
 
 
