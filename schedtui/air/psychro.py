@@ -16,8 +16,10 @@ import math
 import sys
 from contextlib import contextmanager
 from dataclasses import dataclass
+from functools import lru_cache
 from typing import TYPE_CHECKING, Any, Final, cast
 
+from schedtui.air.crossing import crossing
 from schedtui.errors import AirError
 from schedtui.units import ALTITUDE, HUMIDITY_RATIO, STATION_PRESSURE, TEMPERATURE, System
 
@@ -68,6 +70,8 @@ FREEZING_POINT: Final[dict[System, float]] = {"IP": 32.0, "SI": 0.0}
 _TOLERANCE = 1e-9  # degrees; the library's own leaves a wet bulb good to 0.002 °F only
 _DRIEST = 1e-7  # humidity ratio below which saturation would lie outside the formulas
 _OUT_OF_GAP = 1.0 - 1e-6
+_UNDER_BOILING = 1e-6  # degrees
+_REMEMBERED = 4096  # wet bulbs: each air's is asked for by several checks and columns
 
 
 def _instance(system: System) -> ModuleType:
@@ -82,14 +86,14 @@ def _instance(system: System) -> ModuleType:
     return module
 
 
-@dataclass(frozen=True, slots=True)
+@dataclass(frozen=True, slots=True, eq=False)
 class Psychrometrics:
     """The formulas in one unit system; pressures in psia | kPa, enthalpies in Btu/lb | kJ/kg.
 
     Args:
         system: the unit system of every argument and result.
         library: the psychrolib instance set to it.
-        thousand: what makes a Pa of a kPa and a J of a kJ; 1 in IP.
+        thousand: what makes of a kPa the library's Pa, of a kJ its J; 1 in IP.
     """
 
     system: System
@@ -132,7 +136,7 @@ class Psychrometrics:
             raise AirError(f"wet bulb {self._degrees(wb)} is above dry bulb {self._degrees(db)}")
         if wb == db:  # saturated; over ice the IP equation misses that by up to 1.3e-4
             return self._below_boiling("GetSatHumRatio", (db,), db, pressure)
-        w = self._ask("GetHumRatioFromTWetBulb", db, wb, self._pressure(pressure))
+        w = self._ask("GetHumRatioFromTWetBulb", db, wb, pressure * self.thousand)
         if w < 0:
             raise AirError(
                 f"no air of {self._degrees(db)} dry bulb has a wet bulb of {self._degrees(wb)}: "
@@ -215,7 +219,7 @@ class Psychrometrics:
         Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 5, 6 and 20.
         """
         self.require_temperature("dry bulb", db)
-        w = self._ask("GetSatHumRatio", db, self._pressure(pressure))
+        w = self._ask("GetSatHumRatio", db, pressure * self.thousand)
         return w if w >= 0 else math.inf
 
     def enthalpy(self, db: float, w: float) -> float:
@@ -250,7 +254,7 @@ class Psychrometrics:
 
         Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 26.
         """
-        return self._ask("GetMoistAirVolume", db, w, self._pressure(pressure))
+        return self._ask("GetMoistAirVolume", db, w, pressure * self.thousand)
 
     def relative_humidity(self, db: float, w: float, pressure: float) -> float:
         """Return the relative humidity [%], above 100 where the air holds fog.
@@ -262,7 +266,7 @@ class Psychrometrics:
 
         Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 20 and 22.
         """
-        return 100 * self._ask("GetRelHumFromHumRatio", db, w, self._pressure(pressure))
+        return 100 * self._ask("GetRelHumFromHumRatio", db, w, pressure * self.thousand)
 
     def dew_point(self, db: float, w: float, pressure: float) -> float:
         """Return the dew point [°F | °C], never above the dry bulb.
@@ -282,8 +286,15 @@ class Psychrometrics:
                 f"humidity ratio {w:g} {HUMIDITY_RATIO.unit(self.system)} "
                 "is too low for the air to have a dew point"
             )
-        return self._at_saturation("GetTDewPointFromHumRatio", db, w, pressure)
+        try:
+            return self._ask("GetTDewPointFromHumRatio", db, w, pressure * self.thousand)
+        except AirError:
+            # The formulas over ice and over water leave 4e-7 of vapour pressure between them at
+            # the triple point; a search for a value in there ends at neither edge.
+            w *= _OUT_OF_GAP
+            return self._ask("GetTDewPointFromHumRatio", db, w, pressure * self.thousand)
 
+    @lru_cache(maxsize=_REMEMBERED)  # noqa: B019  both that there are stay as long as the module
     def wet_bulb(self, db: float, w: float, pressure: float) -> float:
         """Return the thermodynamic wet bulb [°F | °C]: the lower one where ice and water both fit.
 
@@ -294,9 +305,25 @@ class Psychrometrics:
 
         Source: ASHRAE Handbook—Fundamentals 2017, ch. 1, eq. 33 and 35 solved for the wet bulb.
         """
-        # The library brackets it by the dew point, which air of no moisture has not; so little
-        # moisture as is put in its place moves the wet bulb by less than 0.001 °F.
-        return self._at_saturation("GetTWetBulbFromHumRatio", db, max(w, _DRIEST), pressure)
+        # Bracketed by the dew point, which air of no moisture has not: so little moisture as is put
+        # in its place moves the wet bulb by less than 0.001 °F.
+        w = max(w, _DRIEST)
+        humidity_ratio, asked = self.library.GetHumRatioFromTWetBulb, pressure * self.thousand
+
+        def excess(wb: float) -> float:
+            return float(humidity_ratio(db, wb, asked)) - w
+
+        low, high = self.dew_point(db, w, pressure), db
+        if low >= high:
+            return db
+        if excess(high) <= 0:  # water boils at the dry bulb
+            high = min(high, self._ask("GetTDewPointFromVapPres", db, asked) - _UNDER_BOILING)
+        freezing = FREEZING_POINT[self.system]
+        if low < freezing < high:
+            # The humidity ratio drops where the ice melts, so each side is searched by itself.
+            below = math.nextafter(freezing, low)
+            low, high = (low, below) if excess(below) > 0 else (freezing, high)
+        return crossing(excess, low, high, _TOLERANCE)
 
     def station_pressure(self, altitude: float) -> float:
         """Return the standard atmosphere's pressure [psia | kPa].
@@ -326,30 +353,17 @@ class Psychrometrics:
         except (ValueError, ArithmeticError) as error:
             raise AirError(str(error)) from error
 
-    def _pressure(self, pressure: float) -> float:
-        """Return the pressure as the library wants it [psia | Pa]."""
-        return pressure * self.thousand
-
     def _below_boiling(
         self, function: str, arguments: tuple[float, ...], temperature: float, pressure: float
     ) -> float:
         """Return a humidity ratio, refusing a vapour pressure above the station pressure."""
-        w = self._ask(function, *arguments, self._pressure(pressure))
+        w = self._ask(function, *arguments, pressure * self.thousand)
         if w < 0:
             raise AirError(
                 f"at {self._degrees(temperature)} the moisture asked for would boil at "
                 f"{pressure:g} {STATION_PRESSURE.unit(self.system)}"
             )
         return w
-
-    def _at_saturation(self, function: str, db: float, w: float, pressure: float) -> float:
-        """Return a temperature found from the saturation curve, across its gap if need be."""
-        try:
-            return self._ask(function, db, w, self._pressure(pressure))
-        except AirError:
-            # The formulas over ice and over water leave 4e-7 of vapour pressure between them at
-            # the triple point; a search for a value in there ends at neither edge.
-            return self._ask(function, db, w * _OUT_OF_GAP, self._pressure(pressure))
 
     def _degrees(self, value: float) -> str:
         return f"{value:g} {TEMPERATURE.unit(self.system)}"

@@ -11,6 +11,7 @@ from __future__ import annotations
 from itertools import pairwise
 from typing import TYPE_CHECKING
 
+from schedtui.air.crossing import crossing
 from schedtui.air.psychro import TEMPERATURE_RANGE, TRIPLE_POINT
 
 if TYPE_CHECKING:
@@ -47,7 +48,7 @@ def first_crossing(warm: State, cool: State) -> float | None:
     for high, low in pairwise(corners):
         beneath = _not_above_zero(gap, low, high)
         if beneath is not None:
-            return _zero_between(gap, beneath, high)
+            return crossing(gap, beneath, high, _SHARPNESS)
     return None
 
 
@@ -66,14 +67,3 @@ def _not_above_zero(convex: Callable[[float], float], low: float, high: float) -
             return b if at_b <= 0 else a
         low, high = (low, b) if at_a < at_b else (a, high)
     return None
-
-
-def _zero_between(function: Callable[[float], float], low: float, high: float) -> float:
-    """Return the zero of a function that is not above zero at `low` and above it at `high`."""
-    while high - low > _SHARPNESS:
-        middle = (low + high) / 2
-        if function(middle) > 0:
-            high = middle
-        else:
-            low = middle
-    return (low + high) / 2

@@ -10,6 +10,7 @@ from __future__ import annotations
 
 import math
 from dataclasses import dataclass, field
+from functools import lru_cache
 from typing import TYPE_CHECKING
 
 from schedtui.air import derivation, psychro
@@ -29,6 +30,8 @@ if TYPE_CHECKING:
 # equation over ice (eq. 35, IP) does not quite close there.
 _SATURATION_TOLERANCE = 2e-4
 
+_REMEMBERED = 1024  # stated pairs of properties
+
 
 @dataclass(frozen=True, slots=True)
 class Air:
@@ -37,6 +40,7 @@ class Air:
     Args:
         system: the unit system of everything asked of it.
         pressure: station pressure [psia | kPa].
+        formulas: the moist-air formulas of the unit system.
 
     Raises:
         AirError: the pressure is not above zero.
@@ -48,12 +52,14 @@ class Air:
 
     system: System
     pressure: float
+    formulas: psychro.Psychrometrics = field(init=False, compare=False, repr=False)
 
     def __post_init__(self) -> None:
-        """Refuse a pressure that is none."""
+        """Refuse a pressure that is none, and settle whose formulas hold."""
         if not 0 < self.pressure < math.inf:
             unit = STATION_PRESSURE.unit(self.system)
             raise AirError(f"station pressure {self.pressure:g} {unit} is not above 0")
+        object.__setattr__(self, "formulas", psychro.formulas(self.system))
 
     @classmethod
     def at_altitude(cls, system: System, altitude: float, steps: Steps | None = None) -> Air:
@@ -74,11 +80,6 @@ class Air:
         return cls(system, pressure)
 
     @property
-    def formulas(self) -> psychro.Psychrometrics:
-        """The moist-air formulas of this air's unit system."""
-        return psychro.formulas(self.system)
-
-    @property
     def density_ratio(self) -> float:
         """Station pressure over the standard atmosphere's (constant-temperature convention)."""
         return self.pressure / psychro.STANDARD_PRESSURE[self.system]
@@ -94,8 +95,7 @@ class Air:
         Raises:
             AirError: no air has these two.
         """
-        w = self.formulas.humidity_ratio_by_wet_bulb(db, wb, self.pressure)
-        state = self._state(db, w, wb)
+        state = _of_bulbs(self, db, wb)
         if steps is not None:
             derivation.by_wet_bulb(steps, state, wb)
         return state
@@ -112,7 +112,7 @@ class Air:
             AirError: no air has these two.
         """
         w = self.formulas.humidity_ratio_by_dew_point(db, dp, self.pressure)
-        state = self._state(db, w)
+        state = self.state(db, w)
         if steps is not None:
             derivation.by_dew_point(steps, state, dp)
         return state
@@ -128,8 +128,7 @@ class Air:
         Raises:
             AirError: no air has these two.
         """
-        w = self.formulas.humidity_ratio_by_relative_humidity(db, rh, self.pressure)
-        state = self._state(db, w)
+        state = _of_relative_humidity(self, db, rh)
         if steps is not None:
             derivation.by_relative_humidity(steps, state, rh)
         return state
@@ -145,7 +144,7 @@ class Air:
         Raises:
             AirError: the humidity ratio is below zero or the dry bulb out of range.
         """
-        state = self._state(db, w)
+        state = self.state(db, w)
         if steps is not None:
             derivation.enthalpy(steps, state)
         return state
@@ -175,7 +174,7 @@ class Air:
         Raises:
             AirError: the enthalpy is below that of dry air.
         """
-        return self._state(db, self.formulas.humidity_ratio_by_enthalpy(db, h))
+        return self.state(db, self.formulas.humidity_ratio_by_enthalpy(db, h))
 
     def enthalpy(self, db: float, w: float) -> float:
         """Return the enthalpy [Btu/lb | kJ/kg of dry air].
@@ -197,7 +196,17 @@ class Air:
         """
         return self.formulas.saturation_humidity_ratio(db, self.pressure)
 
-    def _state(self, db: float, w: float, wb: float | None = None) -> State:
+    def state(self, db: float, w: float, wb: float | None = None) -> State:
+        """Return the state of a dry bulb and a humidity ratio, with the wet bulb if it was stated.
+
+        Args:
+            db: dry bulb [°F | °C].
+            w: humidity ratio [lb/lb | kg/kg].
+            wb: wet bulb that it was made from [°F | °C].
+
+        Raises:
+            AirError: the humidity ratio is below zero or the dry bulb out of range.
+        """
         self.formulas.require_temperature("dry bulb", db)
         self._require_moisture(w)
         return State(self, db, w, self.formulas.enthalpy(db, w), wb)
@@ -316,3 +325,17 @@ class State:
             AirError: there is no such air.
         """
         return self.air.by_humidity_ratio(self.db if db is None else db, self.w if w is None else w)
+
+
+# A schedule states the same few rooms, outdoor and leaving states in row after row, and asks for
+# them again at each corner of the digits and for each remedy.
+
+
+@lru_cache(maxsize=_REMEMBERED)
+def _of_bulbs(air: Air, db: float, wb: float) -> State:
+    return air.state(db, air.formulas.humidity_ratio_by_wet_bulb(db, wb, air.pressure), wb)
+
+
+@lru_cache(maxsize=_REMEMBERED)
+def _of_relative_humidity(air: Air, db: float, rh: float) -> State:
+    return air.state(db, air.formulas.humidity_ratio_by_relative_humidity(db, rh, air.pressure))

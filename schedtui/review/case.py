@@ -30,6 +30,9 @@ if TYPE_CHECKING:
 
 C = TypeVar("C")
 
+Loads = dict[str, float | None]
+"""Loads by condition [MBH | kW], None where one is not known."""
+
 # A unit without outdoor air needs no condition; where the file has none it is computed at this.
 _ROOM_CONDITION = {
     "name": Typed("room", "room", '"room"'),
@@ -143,6 +146,21 @@ class UnitCase:
         pressure, efficiency = unit.need(Unit.fan_total_pressure), unit.need(Unit.fan_efficiency)
         airflow = self.fan_airflow / unit.fan_count
         return shaft_power(airflow, pressure, efficiency, self.site.system)
+
+    @figure
+    def cooling_loads(self) -> Loads:
+        """What the cooling coil requires at each condition, with a first coil in front of it."""
+        return {at.name: known(_both_coils, at) for at in self.cooling}
+
+    @figure
+    def heating_loads(self) -> Loads:
+        """What the heating coil requires at each condition."""
+        return {at.name: known(getattr, at, "heat_load") for at in self.heating}
+
+    @figure
+    def preheat_loads(self) -> Loads:
+        """What the preheat requires at each condition."""
+        return {at.name: known(getattr, at, "preheat_load") for at in self.heating}
 
     @figure
     def required_tons(self) -> float:
@@ -266,6 +284,11 @@ class ScheduleCase:
             if unit.tag is not None:
                 found.setdefault(unit.tag, []).append(unit)
         return found
+
+
+def _both_coils(at: Cooling) -> float:
+    """Return the load of a cooling coil, with that of a first coil in front of it."""
+    return at.coil.total + (at.precool.total if at.has_precool else 0.0)
 
 
 def _why_none(season: str, conditions: Sequence[C], ask: Callable[[C], object]) -> Absent:

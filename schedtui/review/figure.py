@@ -52,16 +52,17 @@ class figure(Generic[T]):  # noqa: N801  reads as a decorator beside `property`
         # What is there stands in the evaluation under its own name, where Python finds it without
         # asking here again; what is absent, or was given for a trial, is among the known.
         known: dict[str, T | Absent] = evaluation.__dict__.setdefault("_known", {})
-        result = known.get(self._name, _UNKNOWN)
+        result: T | Absent = known.get(self._name, _UNKNOWN)
         if result is _UNKNOWN:
             try:
                 result = self._method(evaluation)
             except Absent as absent:
-                result = known[self._name] = absent
+                result = known[self._name] = absent.with_traceback(None)
             except StateError as error:
                 result = known[self._name] = Absent(why=str(error))
         if isinstance(result, Absent):
-            raise result.with_traceback(None)
+            # A twin of it: what is remembered must not keep the frames of everyone who asks.
+            raise Absent(*result.keys, why=result.why)
         evaluation.__dict__[self._name] = result
         return result
 

@@ -20,7 +20,7 @@ from schedtui.review.wording import band, lack, sentence
 from schedtui.schedule.load import CATALOGUES, NAMES
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterator, Sequence
+    from collections.abc import Callable, Iterator, Mapping, Sequence
 
     from schedtui.review.airpath import AirPath
     from schedtui.review.check import Check, Faults
@@ -46,12 +46,16 @@ class _Asking:
     of: Callable[[Unit], Faults]
 
 
-def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
+def judge_unit(
+    case: UnitCase, label: str, bearable: Mapping[str, int] | None = None
+) -> tuple[Finding, ...]:
     """Return the findings of a unit, causes first and then worst first.
 
     Args:
         case: the unit with its evaluations.
         label: how messages name it.
+        bearable: for each check a severity that is no news: what cannot be worse is left out,
+            digits unasked. None to have every finding.
     """
     subject = Subject("unit", case.unit.row_id, label)
     found: list[Finding] = []
@@ -67,7 +71,9 @@ def judge_unit(case: UnitCase, label: str) -> tuple[Finding, ...]:
                 absences.append(Absent(why=str(error)))
                 continue
             for fault in faults:
-                found += _judged(name, check, subject, case, fault, asking)
+                worst = fault.severity or check.severity
+                if bearable is None or worst > bearable.get(name, 0):
+                    found += _judged(name, check, subject, case, fault, asking)
         if absences and any(case.unit.stated(key) for key in check.judges):
             message, keys = lack(absences, case.unit)
             found.append(Finding(name, Severity.MISSING, subject, keys, message))

@@ -16,12 +16,18 @@ from schedtui.review.fluid_side import COOLING, HEATING, PREHEAT, FluidSide
 if TYPE_CHECKING:
     from collections.abc import Iterator, Sequence
 
-    from schedtui.review.case import UnitCase
-    from schedtui.review.cooling import Cooling
+    from schedtui.review.case import Loads, UnitCase
     from schedtui.review.site import Site
     from schedtui.schedule.catalogue.plant import Plant
     from schedtui.schedule.catalogue.unit import Unit
     from schedtui.schedule.view import Schedule
+
+# What a unit knows of each coil's loads.
+_LOADS = {
+    COOLING.what: "cooling_loads",
+    HEATING.what: "heating_loads",
+    PREHEAT.what: "preheat_loads",
+}
 
 
 @dataclass(frozen=True, slots=True)
@@ -43,12 +49,8 @@ class Feed:
 
     def load(self, condition: str) -> float | None:
         """Return what one unit's coil requires at a condition [MBH | kW], None if not known."""
-        if self.side is COOLING:
-            cooling = next((one for one in self.case.cooling if one.name == condition), None)
-            return known(_both_coils, cooling) if cooling is not None else 0.0
-        heating = next((one for one in self.case.heating if one.name == condition), None)
-        load = "preheat_load" if self.side is PREHEAT else "heat_load"
-        return known(getattr, heating, load) if heating is not None else 0.0
+        loads: Loads = getattr(self.case, _LOADS[self.side.what])
+        return loads.get(condition, 0.0)
 
     def flow(self, load: float) -> float | None:
         """Return one unit's flow [gpm | L/s]: as scheduled, else what its load asks for."""
@@ -185,11 +187,6 @@ def _fed(unit: Unit, serves: str) -> tuple[FluidSide, ...]:
     there = tuple(side for side in sides if _exists(unit, side))
     wet = tuple(side for side in there if side.runs(unit))
     return wet or (there if unit.plants is not None else ())
-
-
-def _both_coils(at: Cooling) -> float:
-    """Return the load of a cooling coil, with that of a first coil in front of it."""
-    return at.coil.total + (at.precool.total if at.has_precool else 0.0)
 
 
 def _exists(unit: Unit, side: FluidSide) -> bool:

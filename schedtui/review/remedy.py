@@ -290,13 +290,10 @@ class _Solving:
     def remedy(self, changes: tuple[Change, ...]) -> Remedy:
         """Return changes as a remedy, with what turns worse by them."""
         before = _worst(self.reviewed.own)
-        after = _worst(judge_unit(self._tried(changes), self.reviewed.label))
-        worsens = tuple(
-            name
-            for name, severity in after.items()
-            if severity > max(before.get(name, 0), Severity.MISSING)
-        )
-        return Remedy(changes, worsens)
+        bearable = {name: max(before.get(name, 0), Severity.MISSING) for name in registered()}
+        after = judge_unit(self._tried(changes), self.reviewed.label, bearable)
+        worse = (one.check for one in after if one.severity > bearable[one.check])
+        return Remedy(changes, tuple(dict.fromkeys(worse)))
 
 
 _PARTS = ("preheat_", "return_fan_")

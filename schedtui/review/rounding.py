@@ -8,7 +8,7 @@ watching it, so that no check knows of this.
 from __future__ import annotations
 
 import math
-from collections.abc import Callable, Collection, Iterable, Mapping
+from collections.abc import Callable, Collection, Iterable, Mapping, Sequence
 from dataclasses import dataclass
 
 from schedtui.errors import Absent, StateError
@@ -26,7 +26,9 @@ _BESIDE = 1e-6
 _COIL_TEMPERATURES = ("cool_eat_db", "cool_eat_wb", "cool_lat_db", "cool_lat_wb")
 _ENOUGH = 3  # coil temperatures that must be there to tell half degrees by
 _TENTH, _HALF = 0.1, 0.5
-_HALVINGS = 14
+_HALVINGS = 30  # at most, and only as many as it takes to be
+_NEAR = 0.002  # as near as this share: what is told of it has three digits at most
+_ENDS = 2
 
 
 @dataclass(frozen=True, slots=True)
@@ -57,13 +59,14 @@ def explained_by_digits(
     if fault.scheduled is None or fault.required is None:
         return None
     reads: set[str] = set()
-    if _distance(unit.traced(reads), fault, find) == 0:
+    start = _distance(unit.traced(reads), fault, find)
+    if start == 0:
         return None  # found in something else than the unit's own numbers
     printed = [key for key in reads if Unit.catalogue[key].printed or key in derived]
-    corner, best = _favourable_corner(unit, fault, find, printed)
+    corner, best = _favourable_corner(unit, fault, find, printed, start)
     if not corner or _distance(unit.replaced(corner), fault, find) > 0:
         return None
-    share, moved = _share_needed(unit, fault, find, corner)
+    share, moved = _share_needed(unit, fault, find, corner, start)
     if _is_capacity(unit, fault) and moved > cap / 100 * abs(fault.required):
         return None
     return Explained(best, moved / share)
@@ -77,24 +80,28 @@ def _is_capacity(unit: Unit, fault: Fault) -> bool:
 
 
 def _favourable_corner(
-    unit: Unit, fault: Fault, find: FindIn, printed: Iterable[str]
+    unit: Unit, fault: Fault, find: FindIn, printed: Iterable[str], start: float
 ) -> tuple[Mapping[str, float], str]:
     """Return for each printed number that matters its most favourable value; name the first.
 
-    Each number is tried by itself: every check here moves one way with each of its numbers.
+    Each number is tried by itself: every check here moves one way with each of its numbers, so
+    that what gains at one end of an interval cannot at the other, unless freezing lies between.
+    What is gained is counted from `start`, the distance in the unit as scheduled.
     """
-    start = _distance(unit, fault, find)
     corner: dict[str, float] = {}
     gains: dict[str, float] = {}
     for key in sorted(printed):
-        for value in _interval(unit, key):
+        tried = _interval(unit, key)
+        for value in tried:
             gain = start - _distance(unit.replaced({key: value}), fault, find)
             if gain > gains.get(key, 0.0):
                 corner[key], gains[key] = value, gain
+                if len(tried) <= _ENDS:
+                    break
     return corner, max(gains, key=lambda key: gains[key], default="")
 
 
-def _interval(unit: Unit, key: str) -> Iterable[float]:
+def _interval(unit: Unit, key: str) -> Sequence[float]:
     """Return the ends of what a printed number may stand for, and both sides of freezing."""
     field, cell = Unit.catalogue[key], unit.typed(key)
     if cell is None or not isinstance(cell.value, float):
@@ -103,7 +110,7 @@ def _interval(unit: Unit, key: str) -> Iterable[float]:
     if size is None:
         return ()
     low, high = cell.value - size / 2, cell.value + size / 2
-    ends = [low, high]
+    ends = [high, low]  # too little is scheduled more often than too much
     freezing = _FREEZING[unit.system]
     if field.quantity is TEMPERATURE and low < freezing < high:
         ends += [freezing - _BESIDE, freezing + _BESIDE]
@@ -149,15 +156,15 @@ def _same_fault(unit: Unit, fault: Fault, find: FindIn) -> Fault | None:
 
 
 def _share_needed(
-    unit: Unit, fault: Fault, find: FindIn, corner: Mapping[str, float]
+    unit: Unit, fault: Fault, find: FindIn, corner: Mapping[str, float], start: float
 ) -> tuple[float, float]:
-    """Return the share of the way to a corner at which the fault is gone, and what moved by then.
+    """Return the share of the way to a corner that the fault still stands at, and what moved there.
 
     Returns:
-        The share, above 0 and at most 1, and the movement in the fault's unit.
+        The share, above 0 and at most 1, and the movement from `start` in the fault's unit.
     """
     base = {key: _number(unit, key) for key in corner}
-    start = last = _distance(unit, fault, find)
+    last = start
     low, high = 0.0, 1.0
     for _ in range(_HALVINGS):
         middle = (low + high) / 2
@@ -167,7 +174,9 @@ def _share_needed(
             low, last = middle, distance
         else:
             high = middle
-    return high, start - last
+        if high - low <= _NEAR * high:
+            break
+    return low or high, start - last
 
 
 def _number(unit: Unit, key: str) -> float:

@@ -128,8 +128,10 @@ def _by_line(problems: Iterable[Problem]) -> list[Problem]:
 
 def _raw(source: Source, path: Path) -> str:
     """Return a value's characters; none for a table, whose text is not in one place."""
-    place = source.paths().get(path)
-    return source.raw(path) if place is not None and place.value is not None else ""
+    try:
+        return source.raw(path)
+    except KeyError:
+        return ""
 
 
 @dataclass(slots=True)
@@ -189,10 +191,12 @@ class _Reading:
                 )
                 continue
             known = catalogue.get(key)
-            cells[key] = self._cell(known, (*path, key), value, key in (own_keys or ()))
-            number = known is not None and known.quantity is not None
-            shown = _shown(value, cells[key].toml, number=number)
-            self._note_bad(cells[key], shown, (*path, key), subject)
+            cell = self._cell(known, (*path, key), value, key in (own_keys or ()))
+            cells[key] = cell
+            if cell.problem is not None:
+                number = known is not None and known.quantity is not None
+                shown = _shown(value, cell.toml, number=number)
+                self._note_bad((*path, key), subject, shown, cell.problem)
         if table != "defaults":
             self._note_missing(catalogue, cells, path, subject)
         origin = Origin(self.source, index, dict(cells), len(accepted))
@@ -211,11 +215,10 @@ class _Reading:
             return Typed(raw, None, raw, "is no array of tables; accepted: [[unit.accepted]]")
         return Typed(value if isinstance(value, str) else raw, None, raw)
 
-    def _note_bad(self, cell: Typed, shown: str, path: Path, subject: str) -> None:
-        if cell.problem is not None:
-            self.noted.add(path)
-            line = self.source.line(path)
-            self.problems.append(Problem(line, subject, str(path[-1]), shown, cell.problem))
+    def _note_bad(self, path: Path, subject: str, shown: str, problem: str) -> None:
+        self.noted.add(path)
+        line = self.source.line(path)
+        self.problems.append(Problem(line, subject, str(path[-1]), shown, problem))
 
     def _note_bad_elsewhere(self) -> None:
         """Note what is no TOML in tables that nothing here reads."""

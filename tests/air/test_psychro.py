@@ -8,7 +8,12 @@ from concurrent.futures import ThreadPoolExecutor
 import psychrolib
 import pytest
 
-from schedtui.air.psychro import STANDARD_PRESSURE, formulas, station_pressure
+from schedtui.air.psychro import (
+    FREEZING_POINT,
+    STANDARD_PRESSURE,
+    formulas,
+    station_pressure,
+)
 from schedtui.errors import AirError
 
 IP, SI = formulas("IP"), formulas("SI")
@@ -146,3 +151,43 @@ def test_a_numba_that_is_loaded_already_stays_loaded(tmp_path) -> None:
         [sys.executable, "-c", program], capture_output=True, text=True, check=False
     )
     assert (done.returncode, done.stderr) == (0, "")
+
+
+@pytest.mark.parametrize(("system", "coldest", "hottest"), [("IP", -40, 200), ("SI", -40, 93)])
+def test_wet_bulbs_agree_with_the_librarys_own_search(system, coldest, hottest) -> None:
+    # psychrolib's search, which halves its way from the dew point to the dry bulb.
+    asked = formulas(system)
+    pressure = STANDARD_PRESSURE[system]
+    freezing = FREEZING_POINT[system]
+    compared = 0
+    for db in range(coldest, hottest, 7):
+        for share in (0.02, 0.1, 0.35, 0.6, 0.9, 0.999):
+            w = share * asked.saturation_humidity_ratio(db, pressure)
+            theirs = asked.library.GetTWetBulbFromHumRatio(db, w, pressure * asked.thousand)
+            ours = asked.wet_bulb(db, w, pressure)
+            if ours < freezing <= theirs:
+                continue  # one humidity ratio, two wet bulbs
+            assert ours == pytest.approx(theirs, abs=1e-7)
+            compared += 1
+    assert compared > 100
+
+
+@pytest.mark.parametrize(("system", "db"), [("IP", 41.0), ("SI", 4.0)])
+def test_of_two_wet_bulbs_about_freezing_the_lower_is_told(system, db) -> None:
+    asked, pressure = formulas(system), STANDARD_PRESSURE[system]
+    freezing = FREEZING_POINT[system]
+    # Handbook, ch. 1: eq. 35 just below freezing gives more moisture than eq. 33 just above it.
+    over_ice = asked.humidity_ratio_by_wet_bulb(db, freezing - 0.1, pressure)
+    over_water = asked.humidity_ratio_by_wet_bulb(db, freezing, pressure)
+    assert over_water < over_ice
+    assert asked.wet_bulb(db, over_ice, pressure) == pytest.approx(freezing - 0.1, abs=1e-8)
+    drier = asked.humidity_ratio_by_wet_bulb(db, freezing - 1, pressure)
+    assert asked.wet_bulb(db, drier, pressure) == pytest.approx(freezing - 1, abs=1e-8)
+
+
+@pytest.mark.parametrize(("system", "db"), [("IP", 250.0), ("SI", 120.0)])
+def test_air_hotter_than_boiling_has_a_wet_bulb_below_it(system, db) -> None:
+    asked, pressure = formulas(system), STANDARD_PRESSURE[system]
+    wet_bulb = asked.wet_bulb(db, 0.02, pressure)
+    assert wet_bulb < {"IP": 212.0, "SI": 100.0}[system]
+    assert asked.humidity_ratio_by_wet_bulb(db, wet_bulb, pressure) == pytest.approx(0.02, abs=1e-9)

@@ -70,6 +70,7 @@ class Field(Generic[T]):
         instead_of: name of the set of keys of which a row states only one.
         own_only: whether `[defaults]` may not state it for every unit.
         core: whether its column is always shown; others are while some row has a value.
+        headings: what sheets call its column below the heading of its group.
     """
 
     kind: Kind
@@ -83,6 +84,7 @@ class Field(Generic[T]):
     instead_of: str | None = None
     own_only: bool = False
     core: bool = False
+    headings: tuple[str, ...] = ()
     key: str = field(init=False, default="")
 
     def __set_name__(self, owner: type, name: str) -> None:
@@ -129,12 +131,13 @@ class In:
         instead_of: str | None = None,
         required: bool = False,
         core: bool = False,
+        headings: tuple[str, ...] = (),
     ) -> Field[float | None]:
         """Return a field for a number of `quantity`, within its usual range unless told."""
         ip, si = _both(within or ranges.usual(quantity))
         return Field(
             NumberKind(quantity, ip, si), label, short, doc, self.group, None,
-            printed=printed, instead_of=instead_of, required=required, core=core,
+            printed=printed, instead_of=instead_of, required=required, core=core, headings=headings,
         )  # fmt: skip
 
     def number_or(
@@ -146,22 +149,33 @@ class In:
         doc: str,
         *,
         within: tuple[Range, Range] | Range | None = None,
+        headings: tuple[str, ...] = (),
     ) -> Field[float]:
         """Return a field for a number that has a default."""
         ip, si = _both(within or ranges.usual(quantity))
-        return Field(NumberKind(quantity, ip, si), label, short, doc, self.group, default)
+        kind = NumberKind(quantity, ip, si)
+        return Field(kind, label, short, doc, self.group, default, headings=headings)
 
-    def count(self, label: str, short: str, doc: str, *, least: int = 0) -> Field[float | None]:
+    def count(
+        self, label: str, short: str, doc: str, *, least: int = 0, headings: tuple[str, ...] = ()
+    ) -> Field[float | None]:
         """Return a field for a whole number from `least` upwards."""
         kind = NumberKind(COUNT, Range(least), Range(least), whole=True)
-        return Field(kind, label, short, doc, self.group, None)
+        return Field(kind, label, short, doc, self.group, None, headings=headings)
 
     def count_or(
-        self, default: int, label: str, short: str, doc: str, *, least: int = 0
+        self,
+        default: int,
+        label: str,
+        short: str,
+        doc: str,
+        *,
+        least: int = 0,
+        headings: tuple[str, ...] = (),
     ) -> Field[float]:
         """Return a field for a whole number that has a default."""
         kind = NumberKind(COUNT, Range(least), Range(least), whole=True)
-        return Field(kind, label, short, doc, self.group, float(default))
+        return Field(kind, label, short, doc, self.group, float(default), headings=headings)
 
     def text(
         self,
@@ -173,35 +187,62 @@ class In:
         blank: bool = False,
         own_only: bool = False,
         core: bool = False,
+        headings: tuple[str, ...] = (),
     ) -> Field[str | None]:
         """Return a field for a text."""
         return Field(
             TextKind(blank), label, short, doc, self.group, None,
-            required=required, own_only=own_only, core=core,
+            required=required, own_only=own_only, core=core, headings=headings,
         )  # fmt: skip
 
     def choice(
-        self, choices: tuple[str, ...], label: str, short: str, doc: str, *, required: bool = False
+        self,
+        choices: tuple[str, ...],
+        label: str,
+        short: str,
+        doc: str,
+        *,
+        required: bool = False,
+        headings: tuple[str, ...] = (),
     ) -> Field[str]:
         """Return a field for one of `choices`, the first of which is the default."""
         kind = ChoiceKind(choices)
-        return Field(kind, label, short, doc, self.group, choices[0], required=required)
+        return Field(
+            kind, label, short, doc, self.group, choices[0], required=required, headings=headings
+        )
 
     def choice_or_none(
-        self, choices: tuple[str, ...], label: str, short: str, doc: str
+        self,
+        choices: tuple[str, ...],
+        label: str,
+        short: str,
+        doc: str,
+        *,
+        headings: tuple[str, ...] = (),
     ) -> Field[str | None]:
         """Return a field for one of `choices` that may be left open."""
-        return Field(ChoiceKind(choices), label, short, doc, self.group, None)
+        kind = ChoiceKind(choices)
+        return Field(kind, label, short, doc, self.group, None, headings=headings)
 
-    def flag(self, label: str, short: str, doc: str, *, default: bool) -> Field[bool]:
+    def flag(
+        self, label: str, short: str, doc: str, *, default: bool, headings: tuple[str, ...] = ()
+    ) -> Field[bool]:
         """Return a field for true or false."""
-        return Field(FlagKind(), label, short, doc, self.group, default)
+        return Field(FlagKind(), label, short, doc, self.group, default, headings=headings)
 
     def texts(
-        self, label: str, short: str, doc: str, *, own_only: bool = False
+        self,
+        label: str,
+        short: str,
+        doc: str,
+        *,
+        own_only: bool = False,
+        headings: tuple[str, ...] = (),
     ) -> Field[tuple[str, ...] | None]:
         """Return a field for a list of texts."""
-        return Field(TextsKind(), label, short, doc, self.group, None, own_only=own_only)
+        return Field(
+            TextsKind(), label, short, doc, self.group, None, own_only=own_only, headings=headings
+        )
 
     def day(self, label: str, short: str, doc: str) -> Field[object | None]:
         """Return a field for a date."""

@@ -17,19 +17,27 @@ _BLANK = re.compile(r"(?:[ \t]*(?:#[^\n]*)?\r?\n)*[ \t]*(?:#[^\n]*\Z)?")
 _REST = re.compile(r"[ \t]*(?:#[^\n]*)?(?:\n|\r\n|\Z)")
 _SPACE = re.compile(r"[ \t]*")
 _GAP = re.compile(r"(?:[ \t]|\r?\n|#[^\n]*)*")
-_BARE_KEY = re.compile(r"[A-Za-z0-9_-]+")
+_BARE_KEY = re.compile(r"([A-Za-z0-9_-]+)[ \t]*")
 _ONE_LINE = {
     '"': re.compile(r'"(?:[^"\\\n]|\\[^\n])*"'),
     "'": re.compile(r"'[^'\n]*'"),
 }
-_PLAIN_STRING = re.compile(
-    r'"[^"\\\x00-\x08\x0a-\x1f\x7f]*"|' + r"'[^'\x00-\x08\x0a-\x1f\x7f]*'",
+_PLAIN = (  # what most values are: TOML without a further look
+    r'"[^"\\\x00-\x08\x0a-\x1f\x7f]*"|'
+    r"'[^'\x00-\x08\x0a-\x1f\x7f]*'|"
+    r"[+-]?(?:0|[1-9][0-9]{0,99})(?:\.[0-9]{1,99})?|true|false"
 )
-_PLAIN_NUMBER = re.compile(r"[+-]?(?:0|[1-9][0-9]*)(?:\.[0-9]+)?|true|false")
+_PLAIN_SCALAR = re.compile(_PLAIN)
 _ESCAPE_OR_CLOSE = re.compile(r'\\.|"""', re.DOTALL)
-_IN_LINE = re.compile(r"[^#\n]*")
-_IN_ARRAY = re.compile(r"[^#\n,\]]*")
-_IN_TABLE = re.compile(r"[^#\n,}]*")
+
+
+def _up_to(ends: str) -> re.Pattern[str]:
+    """Match a plain value that stands before one of `ends`, else whatever stands there."""
+    before_end = rf"(?=[ \t]*(?:[#\n{ends}]|\r\n|\Z))"
+    return re.compile(rf"[ \t]*(?:(?P<plain>{_PLAIN}){before_end}|[^#\n{ends}]*)")
+
+
+_IN_LINE, _IN_ARRAY, _IN_TABLE = map(_up_to, ("", r",\]", ",}"))
 _BRACKET_OR_QUOTE = re.compile(r"""[\[\]{}"'#\n]""")
 # A line inside an array that can only be the next statement: the array was never closed.
 _STATEMENT = re.compile(
@@ -149,7 +157,7 @@ def scan(text: str) -> Scan:
             at = end
             continue
         statements.append(statement)
-        at = _past(_REST, text, statement.end)
+        at = statement.end
     return Scan(tuple(statements), tuple(faults))
 
 
@@ -173,8 +181,7 @@ def _past(pattern: re.Pattern[str], text: str, at: int) -> int:
 def _head(text: str, start: int) -> Head:
     array = text.startswith("[[", start)
     brackets = "]]" if array else "]"
-    keys, ends = _keys(text, _past(_SPACE, text, start + len(brackets)))
-    at = _past(_SPACE, text, ends[-1])
+    keys, _, at = _keys(text, _past(_SPACE, text, start + len(brackets)))
     if not text.startswith(brackets, at):
         raise _Unreadable(
             start,
@@ -189,8 +196,7 @@ def _head(text: str, start: int) -> Head:
 
 
 def _pair(text: str, start: int) -> Pair:
-    keys, ends = _keys(text, start)
-    at = _past(_SPACE, text, ends[-1])
+    keys, ends, at = _keys(text, start)
     if not text.startswith("=", at):
         why = "a line must be a key, =, and a value; here the = is not found after the key"
         raise _Unreadable(start, why, next_line(text, at))
@@ -201,25 +207,26 @@ def _pair(text: str, start: int) -> Pair:
     return Pair(start, keys, ends, value)
 
 
-def _keys(text: str, at: int) -> tuple[tuple[str, ...], tuple[int, ...]]:
+def _keys(text: str, at: int) -> tuple[tuple[str, ...], tuple[int, ...], int]:
+    """Return the parts of a key, the offset past each, and that of what follows the key."""
     keys: list[str] = []
     ends: list[int] = []
     while True:
-        key, at = _key(text, at)
+        key, end, at = _key(text, at)
         keys.append(key)
-        ends.append(at)
-        dot = _past(_SPACE, text, at)
-        if not text.startswith(".", dot):
-            return tuple(keys), tuple(ends)
+        ends.append(end)
+        if not text.startswith(".", at):
+            return tuple(keys), tuple(ends), at
         if len(keys) == DEEPEST:
-            raise _Unreadable(at, f"a key of more than {DEEPEST} parts", next_line(text, at))
-        at = _past(_SPACE, text, dot + 1)
+            raise _Unreadable(end, f"a key of more than {DEEPEST} parts", next_line(text, end))
+        at = _past(_SPACE, text, at + 1)
 
 
-def _key(text: str, at: int) -> tuple[str, int]:
+def _key(text: str, at: int) -> tuple[str, int, int]:
+    """Return one part of a key, the offset past it, and that of what follows it."""
     found = _BARE_KEY.match(text, at)
     if found:
-        return found.group(), found.end()
+        return found[1], found.end(1), found.end()
     quote = text[at : at + 1]
     if quote not in _ONE_LINE:
         why = "a key is letters, digits, _ and -, or stands in quotes; here none is found"
@@ -227,12 +234,14 @@ def _key(text: str, at: int) -> tuple[str, int]:
     found = _ONE_LINE[quote].match(text, at)
     if not found or not is_toml(found.group()):
         raise _Unreadable(at, "this quoted key is no TOML", next_line(text, at))
-    if _PLAIN_STRING.fullmatch(found.group()):
-        return found.group()[1:-1], found.end()
-    return str(tomllib.loads(f"v = {found.group()}")["v"]), found.end()
+    key = str(tomllib.loads(f"v = {found.group()}")["v"])
+    return key, found.end(), _past(_SPACE, text, found.end())
 
 
-def _value(text: str, after_equals: int, bare: re.Pattern[str], depth: int) -> Value:
+def _value(text: str, after_equals: int, within: re.Pattern[str], depth: int) -> Value:
+    found = within.match(text, after_equals)
+    if found and found["plain"]:
+        return Value(*found.span("plain"))
     start = _past(_SPACE, text, after_equals)
     first = text[start : start + 1]
     if first in _ONE_LINE:
@@ -243,14 +252,14 @@ def _value(text: str, after_equals: int, bare: re.Pattern[str], depth: int) -> V
             why = f"brackets nested more than {DEEPEST} deep"
             raise _Unreadable(start, why, next_line(text, start))
         return (_array if first == "[" else _table)(text, start, depth + 1)
-    end = _bare_end(text, start, bare)
+    end = _bare_end(text, start, within)
     if end <= start:
         return Value(after_equals, after_equals, bad=True)
     return Value(start, end, bad=not is_toml(text[start:end]))
 
 
-def _bare_end(text: str, start: int, bare: re.Pattern[str]) -> int:
-    end = _past(bare, text, start)
+def _bare_end(text: str, start: int, within: re.Pattern[str]) -> int:
+    end = _past(within, text, start)
     if text[end : end + 1] == "\n" and text[end - 1] == "\r":
         end -= 1
     return start + len(text[start:end].rstrip(" \t"))
@@ -262,12 +271,10 @@ def is_toml(raw: str) -> bool:
     >>> [is_toml(raw) for raw in ("9440", "9,440", '"AHU-1"', "2026-02-30", "")]
     [True, False, True, False, False]
     """
-    if _PLAIN_STRING.fullmatch(raw):
+    if _PLAIN_SCALAR.fullmatch(raw):
         return True
     if raw[:1] not in _ONE_LINE and len(raw) > LONGEST_NUMBER:
         return False
-    if _PLAIN_NUMBER.fullmatch(raw):
-        return True
     try:
         return list(tomllib.loads(f"v = {raw}")) == ["v"]
     except ValueError:
@@ -343,10 +350,9 @@ def _table(text: str, start: int, depth: int) -> Value:
         return Value(start, at + 1, "table")
     while True:
         try:
-            keys, ends = _keys(text, at)
+            keys, ends, equals = _keys(text, at)
         except _Unreadable:
             return _bad_table(text, start)
-        equals = _past(_SPACE, text, ends[-1])
         if not text.startswith("=", equals):
             return _bad_table(text, start)
         value = _value(text, equals + 1, _IN_TABLE, depth)

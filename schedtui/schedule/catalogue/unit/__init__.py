@@ -18,7 +18,13 @@ class Remarks(Table):
     """What the sheet remarks on the unit."""
 
     __slots__ = ()
-    remarks = In(Group.REMARKS).texts("Remarks", "REMARKS", "Remarks of the sheet.", own_only=True)
+    remarks = In(Group.REMARKS).texts(
+        "Remarks", "REMARKS", "Remarks of the sheet.", own_only=True,
+        headings=(
+            "REMARKS", "REMARK", "NOTES", "NOTE", "COMMENTS", "REMARKS NOTES", "REMARK NO",
+            "NOTE NO",
+        ),
+    )  # fmt: skip
 
 
 class Unit(Identity, AirSide, CoolingSide, CoolingFluid, FanSide, HeatingSide, Remarks):
