@@ -12,7 +12,7 @@ from schedtui.air import fan
 from schedtui.air.derivation import same_moisture
 from schedtui.air.flow import AirflowBasis, dry_air_mass
 from schedtui.air.step import DEFINITION, Step, Steps
-from schedtui.errors import Absent
+from schedtui.errors import Absent, AirError
 from schedtui.review.figure import figure
 from schedtui.review.letters import Letters, Names
 from schedtui.schedule.catalogue.condition import HUMIDITIES, Condition
@@ -324,4 +324,9 @@ def outdoor_air(condition: Condition, site: Site, steps: Steps | None = None) ->
         return site.air.by_dew_point(dry_bulb, condition.need(Condition.outdoor_dp), steps)
     if stated == ["outdoor_rh"]:
         return site.air.by_relative_humidity(dry_bulb, condition.need(Condition.outdoor_rh), steps)
-    return site.air.by_humidity_ratio(dry_bulb, condition.need(Condition.outdoor_w), steps)
+    state = site.air.by_humidity_ratio(dry_bulb, condition.need(Condition.outdoor_w), steps)
+    if state.supersaturated:
+        raise AirError(
+            f"humidity ratio {state.w:g} is above saturation at the dry bulb {dry_bulb:g}"
+        )
+    return state

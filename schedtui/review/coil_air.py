@@ -195,7 +195,7 @@ class CoilAir(AirPath):
             Absent: there is only one.
         """
         unit, air, entering = self.unit, self.site.air, self.to_coil
-        lat_db, lat_wb = unit.need(Unit.precool_lat_db), unit.need(Unit.precool_lat_wb)
+        lat_db, lat_wb = unit.need_both(Unit.precool_lat_db, Unit.precool_lat_wb)
         scheduled = air.by_wet_bulb(lat_db, lat_wb)
         leaving, mode = coil_leaving(entering, scheduled, self.named(CoolingLetters.precooling))
         if self.steps is not None and mode == "wet":
@@ -247,7 +247,7 @@ class CoilAir(AirPath):
     def scheduled_leaving(self) -> State:
         """The leaving state as scheduled, wherever it is taken."""
         unit, steps = self.unit, self.named(CoolingLetters.scheduled_leaving)
-        lat_db, lat_wb = unit.need(Unit.cool_lat_db), unit.need(Unit.cool_lat_wb)
+        lat_db, lat_wb = unit.need_both(Unit.cool_lat_db, Unit.cool_lat_wb)
         return self.site.air.by_wet_bulb(lat_db, lat_wb, steps)
 
     @figure
@@ -285,7 +285,7 @@ class CoilAir(AirPath):
     @figure
     def row_entering(self) -> State:
         """Air entering the coil as the row has it."""
-        eat_db, eat_wb = self.unit.need(Unit.cool_eat_db), self.unit.need(Unit.cool_eat_wb)
+        eat_db, eat_wb = self.unit.need_both(Unit.cool_eat_db, Unit.cool_eat_wb)
         return self.site.air.by_wet_bulb(eat_db, eat_wb, self.lettered("k"))
 
     def _left_by_loads(self) -> State:

@@ -20,6 +20,8 @@ from schedtui.schedule.catalogue.unit import Unit
 if TYPE_CHECKING:
     from schedtui.air.state import State
 
+_FULL = 100.0
+
 
 class Cooling(CoilAir):
     """One unit at one cooling condition."""
@@ -31,6 +33,11 @@ class Cooling(CoilAir):
         They hang on figures whose own steps are not due yet, so another evaluation is asked.
         """
         return CoolingLetters(type(self)(self.unit, self.condition, self.site))
+
+    @property
+    def has_less_load(self) -> bool:
+        """Whether the room has less than its design loads at this condition."""
+        return min(self.condition.sensible_load, self.condition.latent_load) < _FULL
 
     # From the coil to the room
 

@@ -30,6 +30,7 @@ class FluidSide:
         flow: flow of the fluid.
         fluid: which fluid.
         glycol: share of glycol.
+        others: further keys that only such a coil has.
     """
 
     what: str
@@ -41,6 +42,15 @@ class FluidSide:
     flow: Field[float | None]
     fluid: Field[str]
     glycol: Field[float | None]
+    others: tuple[str, ...]
+
+    def exists(self, unit: Unit) -> bool:
+        """Tell whether the unit has such a coil at all, by any key that only it has.
+
+        An entering temperature is often a default for all units, those without the coil included.
+        """
+        keys = (self.total.key, self.flow.key, *self.others)
+        return any(map(unit.stated, keys)) or self.entering.key in unit.own
 
     def runs(self, unit: Unit) -> bool:
         """Tell whether the coil is fed by water or glycol."""
@@ -55,7 +65,8 @@ class FluidSide:
         unit.refuse_bad(self.fluid, Unit.glycol_by)
         unit.refuse_bad(self.glycol)
         kind = cast("FluidKind", unit.value_of(self.fluid))
-        share = unit.value_of(self.glycol) or 0.0
+        # Water has no share, and a glycol without one is no water.
+        share = 0.0 if kind == "water" else unit.need(self.glycol)
         return by_volume(kind, share) if unit.glycol_by == "volume" else Fluid(kind, share)
 
     def carried(self, unit: Unit, system: System) -> float:
@@ -73,15 +84,17 @@ class FluidSide:
 COOLING = FluidSide(
     "cooling coil", Unit.cool_total, Unit.cool_kind, "chilled water",
     Unit.cool_ewt, Unit.cool_lwt, Unit.cool_flow, Unit.cool_fluid, Unit.cool_glycol,
+    ("cool_lat_db", "precool_lat_db", "precool_total"),
 )  # fmt: skip
 HEATING = FluidSide(
     "heating coil", Unit.heat_total, Unit.heat_kind, "hot water",
     Unit.heat_ewt, Unit.heat_lwt, Unit.heat_flow, Unit.heat_fluid, Unit.heat_glycol,
+    ("heat_lat_db",),
 )  # fmt: skip
 PREHEAT = FluidSide(
     "preheat", Unit.preheat_total, Unit.preheat_kind, "hot water",
     Unit.preheat_ewt, Unit.preheat_lwt, Unit.preheat_flow, Unit.preheat_fluid,
-    Unit.preheat_glycol,
+    Unit.preheat_glycol, ("preheat_lat_db",),
 )  # fmt: skip
 HEATING_SIDES = (HEATING, PREHEAT)
 SIDES = (COOLING, HEATING, PREHEAT)

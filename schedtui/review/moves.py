@@ -17,6 +17,8 @@ DOWN: Final = -1
 MOVES: Mapping[str, tuple[tuple[str, int], ...]] = {
     "cool-total-short": (
         ("cool_total", UP),
+        ("cool_tons", UP),
+        ("precool_total", UP),
         ("outdoor_airflow", DOWN),
         ("cool_lat_wb", UP),
         ("supply_airflow", DOWN),
@@ -49,7 +51,7 @@ MOVES: Mapping[str, tuple[tuple[str, int], ...]] = {
     "humidifier-short": (("humidifier", UP), ("outdoor_airflow", DOWN)),
     "room-heat-short": (("heat_lat_db", UP), ("heat_airflow", UP), ("supply_airflow", UP)),
     "heat-water-short": (("heat_flow", UP), ("heat_lwt", DOWN), ("heat_ewt", UP),
-                         ("preheat_flow", UP)),
+                         ("preheat_flow", UP), ("preheat_lwt", DOWN), ("preheat_ewt", UP)),
     "outdoor-air-short": (("outdoor_airflow", UP), ("supply_airflow_min", UP)),
     "motor-short": (("motor_power", UP), ("return_fan_motor_power", UP)),
 }  # fmt: skip

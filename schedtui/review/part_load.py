@@ -25,7 +25,9 @@ if TYPE_CHECKING:
     from schedtui.review.site import Site
     from schedtui.schedule.catalogue.condition import Condition
 
-_FULL = 100.0
+PART_LOAD_NEEDS = ("room_sensible", "room_latent", "room_db", "cool_lat_db", "cool_lat_wb")
+"""Keys without which a unit's part load cannot be had, a room humidity besides."""
+
 _SETTLED = 1e-12
 _MOST_TURNS = 60
 _NEARLY_ALL = 1 - 1e-9  # of the air around the coil, the most that bypass control can send there
@@ -55,16 +57,11 @@ class Settings:
 
 def cooling_at(unit: Unit, condition: Condition, site: Site) -> Cooling:
     """Return a unit at a cooling condition, shedding load where the condition has less of it."""
-    full = condition.sensible_load >= _FULL and condition.latent_load >= _FULL
-    if full:
-        return Cooling(unit, condition, site)
-    states_loads = unit.stated(
-        "room_sensible", "room_latent", "room_db", "cool_lat_db", "cool_lat_wb"
-    )
+    plain = Cooling(unit, condition, site)
+    if not plain.has_less_load or not unit.stated(*PART_LOAD_NEEDS):
+        return plain
     states_humidity = unit.stated("room_rh") or unit.stated("room_wb")
-    if not (states_loads and states_humidity):
-        return Cooling(unit, condition, site)
-    return PartLoad(unit, condition, site)
+    return PartLoad(unit, condition, site) if states_humidity else plain
 
 
 class PartLoad(Cooling):

@@ -151,7 +151,7 @@ class PlantCase:
         for feed, load in zip(self.feeds, self.loads[self.governing], strict=True):
             flow = feed.flow(load or 0.0)
             if flow is None:
-                raise Absent(feed.side.flow.key, why=f"the flow of {feed.label} is not known")
+                raise Absent(why=f"the flow of {feed.label} is not known ({feed.side.flow.key})")
             together += feed.share * flow
         return together * self._diversity
 
@@ -184,18 +184,6 @@ def _fed(unit: Unit, serves: str) -> tuple[FluidSide, ...]:
     Where the unit names the plant and has no such coil, whatever it has is fed by it.
     """
     sides = (COOLING,) if serves == "cooling" else (HEATING, PREHEAT)
-    there = tuple(side for side in sides if _exists(unit, side))
+    there = tuple(side for side in sides if side.exists(unit))
     wet = tuple(side for side in there if side.runs(unit))
     return wet or (there if unit.plants is not None else ())
-
-
-def _exists(unit: Unit, side: FluidSide) -> bool:
-    """Tell whether a unit has a coil at all, by any key that only such a coil has."""
-    return any(map(unit.stated, (side.total.key, side.flow.key, _LEAVING[side.what])))
-
-
-_LEAVING = {
-    COOLING.what: "cool_lat_db",
-    HEATING.what: "heat_lat_db",
-    PREHEAT.what: "preheat_lat_db",
-}

@@ -296,7 +296,7 @@ class _Solving:
         return Remedy(changes, tuple(dict.fromkeys(worse)))
 
 
-_PARTS = ("preheat_", "return_fan_")
+_PARTS = ("preheat_", "return_fan_", "precool_", "cool_tons")
 
 
 def _worst(findings: tuple[Finding, ...]) -> dict[str, int]:

@@ -22,7 +22,7 @@ class RowCoil(Cooling):
     @figure
     def coil_entering(self) -> State:
         """Entering air as scheduled."""
-        eat_db, eat_wb = self.unit.need(Unit.cool_eat_db), self.unit.need(Unit.cool_eat_wb)
+        eat_db, eat_wb = self.unit.need_both(Unit.cool_eat_db, Unit.cool_eat_wb)
         return self.site.air.by_wet_bulb(eat_db, eat_wb)
 
     @figure

@@ -39,5 +39,6 @@ CHECK = Check(
     severity=Severity.CONFLICT,
     sentence="The apparatus dew point is not below the entering water.",
     source="ASHRAE Handbook—HVAC Systems and Equipment, air-cooling coils",
+    judges=("cool_ewt",),
     rated=find,
 )

@@ -12,6 +12,7 @@ from schedtui.air.coil import LOAD_PER_TON
 from schedtui.air.flow import volume_flow
 from schedtui.review.check import Check, Faults
 from schedtui.review.finding import Fault, Severity
+from schedtui.review.part_load import PartLoad
 from schedtui.units import AIRFLOW_PER_LOAD
 
 if TYPE_CHECKING:
@@ -28,7 +29,9 @@ def find(at: Cooling) -> Faults:
         return
     if at.has_precool and unit.precool_total is None:
         return  # the first coil's part of the capacity is not known
-    standard = volume_flow(at.coil_mass, "standard", at.site.air)
+    # At part load the unit supplies less air than the sheet's, which is what the tons go with.
+    design = at.design if isinstance(at, PartLoad) else at
+    standard = volume_flow(design.coil_mass, "standard", at.site.air)
     per = LOAD_PER_TON["IP"] if at.site.system == "IP" else 1.0
     if unit.cool_total == 0:
         return

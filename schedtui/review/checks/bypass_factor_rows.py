@@ -46,5 +46,6 @@ CHECK = Check(
     sentence="The bypass factor goes with the coil's rows.",
     source="ASHRAE Handbook—HVAC Systems and Equipment, air-cooling coils; the range is common "
     "practice",
+    judges=("cool_rows",),
     rated=find,
 )

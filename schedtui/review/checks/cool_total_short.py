@@ -12,11 +12,12 @@ from __future__ import annotations
 
 from typing import TYPE_CHECKING
 
+from schedtui.air.coil import LOAD_PER_TON
 from schedtui.review.check import CAPACITY, Check, Faults
 from schedtui.review.finding import Fault, Measure, Severity
 from schedtui.review.shortfall import is_short
 from schedtui.schedule.catalogue.unit import Unit
-from schedtui.units import LOAD
+from schedtui.units import LOAD, REFRIGERATION
 
 if TYPE_CHECKING:
     from schedtui.review.cooling import Cooling
@@ -27,17 +28,28 @@ _MOST_OF = 0.6  # so much of the fan's heat lacking looks like a net capacity
 def find(at: Cooling) -> Faults:
     """Hold the scheduled total of each coil against its load at one condition."""
     yield from _first_coil(at)
-    if not at.unit.stated("cool_total"):
+    unit, limits = at.unit, at.site.limits
+    per = LOAD_PER_TON[at.site.system]
+    by_tons = not unit.stated("cool_total") and unit.stated("cool_tons")
+    if not by_tons and not unit.stated("cool_total"):
         return
-    scheduled, required = at.unit.need(Unit.cool_total), at.required_total
-    limits = at.site.limits
+    scheduled = unit.need(Unit.cool_tons) * per if by_tons else unit.need(Unit.cool_total)
+    required = at.required_total
     allowed = required - at.coil.condensate_heat
-    if is_short(scheduled, allowed, limits.total_margin, limits.agreement):
-        says = "scheduled total {scheduled}, the coil needs {required}"
-        if _is_net(at, scheduled, allowed):
-            says += "; with the fan's heat of {fan} it would do: is it a net capacity?"
-        fan = Measure(at.fan_heat, LOAD)
-        yield Fault(says, ("cool_total",), scheduled, required, LOAD, {"fan": fan})
+    if not is_short(scheduled, allowed, limits.total_margin, limits.agreement):
+        return
+    says = "scheduled total {scheduled}, the coil needs {required}"
+    if limits.total_margin:
+        says += ", {wanted} with its margin"
+    elif _is_net(at, scheduled, allowed):
+        says += "; with the fan's heat of {fan} it would do: is it a net capacity?"
+    wanted = Measure(required * (1 + limits.total_margin / 100), LOAD)
+    values = {"fan": Measure(at.fan_heat, LOAD), "wanted": wanted}
+    if by_tons:
+        tons = unit.need(Unit.cool_tons)
+        yield Fault(says, ("cool_tons",), tons, required / per, REFRIGERATION, values)
+    else:
+        yield Fault(says, ("cool_total",), scheduled, required, LOAD, values)
 
 
 def _first_coil(at: Cooling) -> Faults:
@@ -62,6 +74,6 @@ CHECK = Check(
     sentence="The scheduled cooling total carries the coil's load at every cooling condition.",
     source="ASHRAE Handbook—Fundamentals, ch. 1 and ch. 18",
     rank=CAPACITY,
-    judges=("cool_total",),
+    judges=("cool_total", "cool_tons"),
     cooling=find,
 )

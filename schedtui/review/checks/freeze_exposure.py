@@ -49,8 +49,7 @@ def _entering(at: Heating) -> Iterator[tuple[FluidSide, float]]:
 
 def _holds_water(at: Heating, side: FluidSide) -> bool:
     """Tell whether a coil is scheduled at all, and fed by water or glycol."""
-    keys = (side.total.key, side.flow.key, side.entering.key)
-    return side.runs(at.unit) and any(map(at.unit.stated, keys))
+    return side.runs(at.unit) and side.exists(at.unit)
 
 
 def _limit(at: Heating, side: FluidSide) -> float:

@@ -33,10 +33,13 @@ from schedtui.units import (
 if TYPE_CHECKING:
     from collections.abc import Container
 
-    from schedtui.review.case import UnitCase
+    from schedtui.review.case import ConditionCase, UnitCase
+    from schedtui.review.plants import PlantCase
+    from schedtui.schedule.catalogue.table import Table
 
 Number = Field[float | None]
 
+_BOTH = 2  # loads, total and sensible, that together tell an airflow's slip
 _SAME = 0.12  # share that the ratios of two loads may part by and still be one
 
 # Temperatures that such a field has in cooling [°F | °C]; outside, the other scale is tried.
@@ -60,7 +63,7 @@ _USUAL: dict[System, tuple[tuple[Number, float, float], ...]] = {
 
 def find(case: UnitCase) -> Faults:
     """Look at percentages, temperatures, loads, the supply airflow, water and fan."""
-    fractions = list(_fractions(case))
+    fractions = list(_fractions(case.unit))
     suspects = [*_temperatures(case), *_loads_and_airflow(case), *_heating(case)]
     yield from (*fractions, *suspects)
     # Whatever follows from a number that is suspect already is not to be accused for it.
@@ -69,9 +72,19 @@ def find(case: UnitCase) -> Faults:
     yield from _fan(case, blamed)
 
 
-def _fractions(case: UnitCase) -> Faults:
-    for key, field in Unit.catalogue.items():
-        cell = case.unit.typed(key) if field.quantity is PERCENT else None
+def find_in_condition(case: ConditionCase) -> Faults:
+    """Look at the percentages of a condition."""
+    return _fractions(case.condition)
+
+
+def find_in_plant(case: PlantCase) -> Faults:
+    """Look at the percentages of a plant."""
+    return _fractions(case.plant)
+
+
+def _fractions(row: Table) -> Faults:
+    for key, field in row.catalogue.items():
+        cell = row.typed(key) if field.quantity is PERCENT else None
         if cell is None or not isinstance(cell.value, float):
             continue
         if 0 < cell.value < 1:
@@ -125,10 +138,28 @@ def _loads_and_airflow(case: UnitCase) -> Faults:
         if fault is not None:
             yield fault
             return
+    if len(ratios) < _BOTH:
+        need = _room_need(case)
+        agrees = need is not None and all(
+            abs(ratio * need - 1) <= _SAME for ratio in ratios.values()
+        )
+        if need is not None and agrees:
+            airflow = unit.need(Unit.supply_airflow)
+            fault = _suspect(Unit.supply_airflow, airflow, need, AIRFLOW, case.site.system)
+            if fault is not None:
+                yield fault
+                return
     for field, ratio in ratios.items():
         fault = _suspect(field, unit.need(field), ratio, LOAD, case.site.system)
         if fault is not None:
             yield fault
+
+
+def _room_need(case: UnitCase) -> float | None:
+    """Return the supply air over what the room's sensible load needs, where it is less."""
+    load = case.unit.room_sensible
+    met = known(lambda: case.governing.room_met.sensible)
+    return met / load if load and met and 0 < met < load else None
 
 
 def _loads_stand_alone(case: UnitCase) -> bool:
@@ -222,4 +253,6 @@ CHECK = Check(
     rank=SLIP,
     reads_digits=False,
     unit=find,
+    condition=find_in_condition,
+    plant=find_in_plant,
 )

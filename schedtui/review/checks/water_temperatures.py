@@ -10,6 +10,7 @@ from __future__ import annotations
 from typing import TYPE_CHECKING
 
 from schedtui.review.check import CONTRADICTION, Check, Faults
+from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Severity
 from schedtui.review.fluid_side import COOLING, HEATING, PREHEAT, FluidSide
 from schedtui.schedule.catalogue.field import Field
@@ -17,26 +18,48 @@ from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import TEMPERATURE
 
 if TYPE_CHECKING:
+    from collections.abc import Callable
+
     from schedtui.review.case import UnitCase
 
 Number = Field[float | None]
 
-_AIR: tuple[tuple[FluidSide, Number, Number], ...] = (
-    (COOLING, Unit.cool_eat_db, Unit.cool_lat_db),
-    (HEATING, Unit.heat_eat_db, Unit.heat_lat_db),
-    (PREHEAT, Unit.preheat_eat_db, Unit.preheat_lat_db),
-)
+# Each coil with its entering and leaving air, and the air that is computed to enter it.
+_AIR: tuple[tuple[FluidSide, Number, Number, Callable[[UnitCase], float]], ...] = (
+    (COOLING, Unit.cool_eat_db, Unit.cool_lat_db, lambda case: case.rated.coil_entering.db),
+    (HEATING, Unit.heat_eat_db, Unit.heat_lat_db, lambda case: case.heat_nearest.heat_entering.db),
+    (PREHEAT, Unit.preheat_eat_db, Unit.preheat_lat_db,
+     lambda case: case.preheat_nearest.preheat_entering.db),
+)  # fmt: skip
 
 
 def find(case: UnitCase) -> Faults:
     """Hold the water of each coil against itself and against the air."""
-    for side, eat, lat in _AIR:
+    for side, eat, lat, entering in _AIR:
         if not side.runs(case.unit):
             continue
         cools = side is COOLING
+        if case.unit.value_of(eat) is None:
+            yield from _against_computed(case, side, known(entering, case))
         yield from _held(case.unit, side.leaving, side.entering, above=not cools)
         yield from _held(case.unit, lat, side.entering, above=not cools)
         yield from _held(case.unit, side.leaving, eat, above=cools)
+
+
+def _against_computed(case: UnitCase, side: FluidSide, entering: float | None) -> Faults:
+    """Hold the leaving water against the computed entering air, where none is scheduled."""
+    value, cools = case.unit.value_of(side.leaving), side is COOLING
+    if value is None or entering is None or value == entering:
+        return
+    if (value > entering) == cools:
+        yield Fault(
+            "{what} {scheduled} is {side} the {required} of the air that enters",
+            (side.leaving.key,),
+            value,
+            entering,
+            TEMPERATURE,
+            {"what": side.leaving.label.lower(), "side": "above" if cools else "below"},
+        )
 
 
 def _held(unit: Unit, field: Number, other: Number, *, above: bool) -> Faults:

@@ -92,6 +92,19 @@ class Table:
             raise Absent(field.key)
         return value
 
+    def need_both(self, one: Field[T | None], other: Field[T | None]) -> tuple[T, T]:
+        """Return the values of two fields that are of use together only.
+
+        Raises:
+            Absent: one or both of them are not stated, or cannot be read; all are named.
+        """
+        first, second = self.value_of(one), self.value_of(other)
+        if first is None or second is None:
+            raise Absent(*(
+                field.key for field, value in ((one, first), (other, second)) if value is None
+            ))  # fmt: skip
+        return first, second
+
     def refuse_bad(self, *fields: Field[T]) -> None:
         """Make sure that no cell of `fields` is unreadable, so that a default does not hide it.
 

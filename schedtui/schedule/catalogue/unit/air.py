@@ -35,8 +35,8 @@ class AirSide(Table):
         AIRFLOW, "Outdoor airflow", "OUTDOOR", "Outdoor air that the unit takes in.", core=True,
         headings=(
             "OUTDOOR AIRFLOW", "OUTDOOR AIR", "OUTDOOR", "OA", "OA CFM", "MIN OUTDOOR AIR",
-            "MIN OUTDOOR AIRFLOW", "MIN OA CFM", "VENTILATION AIRFLOW", "VENTILATION AIR",
-            "DESIGN OUTDOOR AIR",
+            "MIN OUTDOOR AIRFLOW", "MIN OA CFM", "VENTILATION AIRFLOW", "VENTILATION CFM",
+            "VENTILATION AIR", "DESIGN OUTDOOR AIR",
         ),
     )  # fmt: skip
     outdoor_required = _air.number(
@@ -164,8 +164,8 @@ class AirSide(Table):
         "Sensible effectiveness in heating; that of cooling when not given.",
         headings=(
             "HEATING SENSIBLE EFFECTIVENESS", "RECOVERY HEATING SENSIBLE EFFECTIVENESS",
-            "RECOVERY HEATING SENSIBLE",
-            "RECOVERY WINTER SENSIBLE EFFECTIVENESS", "RECOVERY WINTER SENSIBLE",
+            "RECOVERY HEATING SENSIBLE", "RECOVERY WINTER SENSIBLE EFFECTIVENESS",
+            "RECOVERY WINTER SENSIBLE",
         ),
     )  # fmt: skip
     recovery_heat_latent = _recovery.number(
@@ -173,8 +173,8 @@ class AirSide(Table):
         "Latent effectiveness in heating; that of cooling when not given.",
         headings=(
             "HEATING LATENT EFFECTIVENESS", "RECOVERY HEATING LATENT EFFECTIVENESS",
-            "RECOVERY HEATING LATENT",
-            "RECOVERY WINTER LATENT EFFECTIVENESS", "RECOVERY WINTER LATENT",
+            "RECOVERY HEATING LATENT", "RECOVERY WINTER LATENT EFFECTIVENESS",
+            "RECOVERY WINTER LATENT",
         ),
     )  # fmt: skip
     recovery_basis = _recovery.choice(

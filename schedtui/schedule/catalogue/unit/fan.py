@@ -44,7 +44,7 @@ class FanSide(Table):
         printed=True,
         headings=(
             "FILTER DROP", "FILTER AIR DROP", "FILTER APD", "FILTER PRESSURE DROP",
-            "DIRTY FILTER DROP", "FILTER DIRTY DROP", "FILTER FINAL DROP",
+            "DIRTY FILTER DROP", "FILTER DIRTY DROP",
         ),
     )  # fmt: skip
     fan_efficiency = _fan.number(

@@ -17,8 +17,10 @@ class Identity(Table):
         "Tag", "TAG", "Name of the unit on the drawings.", required=True, own_only=True, core=True,
         headings=(
             "TAG", "UNIT", "UNIT TAG", "UNIT NO", "UNIT ID", "UNIT DESIGNATION", "UNIT MARK",
-            "MARK", "SYMBOL", "DESIGNATION", "EQUIPMENT TAG", "EQUIPMENT NO", "EQUIPMENT", "ITEM",
-            "NO", "REFERENCE", "AHU", "AHU TAG", "AHU NO",
+            "UNIT NAME", "UNIT SYMBOL", "MARK", "PLAN MARK", "PLAN CODE", "SYMBOL", "ID",
+            "DESIGNATION", "EQUIPMENT TAG", "EQUIPMENT ID", "EQUIPMENT DESIGNATION",
+            "AHU DESIGNATION", "SYSTEM", "SYSTEM TAG", "EQUIPMENT NO", "EQUIPMENT", "ITEM", "NO",
+            "REFERENCE", "AHU", "AHU TAG", "AHU NO",
         ),
     )  # fmt: skip
     serves = _unit.text(
