@@ -2,14 +2,17 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
 from functools import partial
 from typing import TYPE_CHECKING, TypeVar
 
 from schedtui.errors import Absent, AirError
 from schedtui.report.findings import finding_entries
-from schedtui.report.page import Block, Heading, Page, Paragraph, Table
+from schedtui.report.page import Block, Entries, Entry, Heading, Page, Paragraph, Table
+from schedtui.review.accept import is_of
 from schedtui.review.cooling import Cooling
 from schedtui.review.figure import known
+from schedtui.review.finding import Severity
 from schedtui.review.quantities import (
     COOLING_FIGURES,
     COOLING_STATES,
@@ -17,6 +20,7 @@ from schedtui.review.quantities import (
     HEATING_STATES,
 )
 from schedtui.review.remedy import remedies_by_check
+from schedtui.schedule.catalogue.accepted import Accepted
 from schedtui.units import (
     ENTHALPY,
     HUMIDITY_RATIO,
@@ -28,12 +32,14 @@ from schedtui.units import (
 )
 
 if TYPE_CHECKING:
-    from collections.abc import Callable, Iterator
+    from collections.abc import Callable, Iterable, Iterator
 
     from schedtui.air.state import State
     from schedtui.review.airpath import AirPath
+    from schedtui.review.finding import Finding
     from schedtui.review.quantities import Figure
     from schedtui.review.reviewed import UnitReview
+    from schedtui.schedule.view import Schedule
 
 A = TypeVar("A", bound="AirPath")
 
@@ -48,22 +54,55 @@ _PROPERTIES: tuple[tuple[str, str, Quantity], ...] = (
 )
 
 
-def unit_findings_page(reviewed: UnitReview) -> Page:
-    """Return what was found in a unit, worst first."""
+def read_together(findings: Iterable[Finding]) -> tuple[tuple[Finding, ...], ...]:
+    """Return findings as they are read, an entry each: what is missing for one reason is one."""
+    entries: dict[tuple[str, bool, int], tuple[Finding, ...]] = {}
+    for place, one in enumerate(findings):
+        apart = -1 if one.severity is Severity.MISSING else place
+        alike = (one.message, one.accepted, apart)
+        entries[alike] = (*entries.get(alike, ()), one)
+    return tuple(entries.values())
+
+
+def unit_findings_page(reviewed: UnitReview, schedule: Schedule | None = None) -> Page:
+    """Return what was found in a unit, worst first, in the entries of `read_together`.
+
+    Args:
+        reviewed: the unit.
+        schedule: the schedule as it is now, for who has accepted what and why; left out without.
+    """
     heading = Heading(f"{reviewed.label}: {reviewed.status}", 2)
     bad = [f"{key} {cell.text!r} {cell.problem}" for key, cell in reviewed.unit.own.items()
            if cell.bad]  # fmt: skip
     blocks: list[Block] = [heading, *(Paragraph(text) for text in bad)]
     if reviewed.findings:
-        cures = remedies_by_check(reviewed)
-        blocks.append(
-            finding_entries(
-                reviewed.findings, lambda one: one.severity.word, lambda one: cures.get(one.check)
-            )
-        )
+        together = read_together(reviewed.findings)
+        blocks.append(Entries(tuple(_entry(reviewed, ones, schedule) for ones in together)))
     elif not bad:
         blocks.append(Paragraph("Nothing found."))
     return Page(tuple(blocks))
+
+
+def _entry(reviewed: UnitReview, findings: tuple[Finding, ...], schedule: Schedule | None) -> Entry:
+    """Return one entry of a unit's findings; what is accepted says by whom and needs no remedy."""
+    first = findings[0]
+    cures = {} if first.accepted else remedies_by_check(reviewed)
+    (entry,) = finding_entries(
+        findings, lambda one: one.severity.word, lambda one: cures.get(one.check)
+    ).entries
+    if schedule is None or not first.accepted:
+        return entry
+    return replace(entry, lines=(*entry.lines, *_who_and_why(first, schedule)))
+
+
+def _who_and_why(finding: Finding, schedule: Schedule) -> Iterator[str]:
+    """Say who has accepted a finding of a unit, when and why."""
+    for row in schedule.document.row("unit", finding.subject.row_id).accepted:
+        accepted = Accepted(row.row_id, schedule.system, row.cells)
+        if is_of(accepted, finding):
+            by = f" by {accepted.by}" if accepted.by else ""
+            on = f" on {accepted.on}" if accepted.on else ""
+            yield f"Accepted{by}{on}: {accepted.reason or 'no reason given'}"
 
 
 def unit_air_page(reviewed: UnitReview) -> Page:

@@ -62,7 +62,11 @@ EDIT_KEYS: tuple[tuple[str, str], ...] = (
     ("Esc", "leave the cell as it was"),
 )
 PANE_KEYS: tuple[tuple[str, str], ...] = (
-    ("Up, Down, PgUp, PgDn", "scroll"),
+    ("Up, Down", "among findings the previous and the next; else scroll"),
+    ("Enter", "clear a short finding with a remedy; asks which where there are several"),
+    ("a", "accept the finding in the numbers as they stand, with a reason"),
+    ("t", "take back that it is accepted; take out an acceptance that has lapsed"),
+    ("PgUp, PgDn", "scroll"),
     ("Left, Right", "scroll sideways where there is more"),
     ("Home, End", "the page's beginning and end"),
 )
@@ -76,4 +80,7 @@ COMPUTED_HINT = ("F1 help", "Tab next cell", *TABLE_HINT[2:])
 EDIT_HINT = ("Enter takes", "Esc leaves", "Tab takes, goes right", "F1 help")
 PANE_HINT = ("F1 help", "ctrl+w table", "ctrl+p next page", "ctrl+l larger", "PgDn scroll")
 LARGE_HINT = ("F1 help", "ctrl+l smaller", "ctrl+p next page", "PgDn scroll")
+CLEARS, ACCEPTS, TAKES_BACK = "Enter clears it", "a accepts it", "t takes it back"
+FINDINGS_HINT = ("ctrl+w table", "Down next", "F1 help", "ctrl+p next page", "ctrl+l larger")
+LARGE_FINDINGS_HINT = ("ctrl+l smaller", "Down next", "F1 help", "ctrl+p next page")
 HELP_HINT = ("F1 back", "PgDn scroll")

@@ -20,6 +20,7 @@ from schedtui.screen.around import Around
 from schedtui.screen.bars import HINT_STYLE, Bar
 from schedtui.screen.filing import Filing
 from schedtui.screen.grid import Grid
+from schedtui.screen.mending import Mending
 from schedtui.screen.question import Answer, Question
 from schedtui.screen.tally import Tally
 from schedtui.screen.terse_update import terse
@@ -69,6 +70,7 @@ class ScheduleApp(App[None]):
         self._grid = Grid(self._table, empty="No unit yet.", tell=self._hear, id="units")
         self._around = Around(session, self._table, self._grid)
         self._filing = Filing(self, session, self)
+        self._around.pane.acts = Mending(self, session, self._around, self).acts
         self._around.marks = lambda: self._filing.marks
         self._settling = False
         self._begun_at: tuple[int, str] | None = None
@@ -192,7 +194,7 @@ class ScheduleApp(App[None]):
             case Grid.ReadOnly():
                 self._around.hint(f"Not to be typed into. {self._around.about()}")
             case Grid.CursorMoved():
-                self._around.show_pane()
+                self._around.follow()
                 self._around.show_hint()
                 if self._grid.editing is None:
                     self._filing.look()
@@ -204,7 +206,7 @@ class ScheduleApp(App[None]):
         grid, row_id, key = message.grid, message.row_key, message.column_key
         if message.touched:
             try:
-                self._do(row_id, lambda: self._session.set_cell("unit", row_id, key, message.text))
+                self.do(row_id, lambda: self._session.set_cell("unit", row_id, key, message.text))
             except AmountError as error:
                 grid.refuse(str(error))
                 self._around.hint(f"Not taken: {error}")
@@ -221,7 +223,7 @@ class ScheduleApp(App[None]):
         inherited = unit.inherited.get(key)
         if key in unit.own:
             try:
-                self._do(row_id, lambda: self._session.set_cell("unit", row_id, key, ""))
+                self.do(row_id, lambda: self._session.set_cell("unit", row_id, key, ""))
             except AmountError as error:
                 self._around.answer = (
                     f"Not cleared: {self._session.field('unit', key).label} {error}"
@@ -239,7 +241,7 @@ class ScheduleApp(App[None]):
 
         def answered(answer: str | None) -> None:
             if answer == _DROP:
-                self._do(row_id, lambda: self._session.without_default(row_id, key))
+                self.do(row_id, lambda: self._session.without_default(row_id, key))
                 self._around.show_pane()
                 self._around.show_hint()
 
@@ -247,7 +249,7 @@ class ScheduleApp(App[None]):
         without = Answer("enter", "Enter", f"do without it for {label}", _DROP)
         self.push_screen(Question(says, (without, _STAY_ANSWER)), answered)
 
-    def _do(self, row_id: int, edit: Callable[[], frozenset[int]]) -> None:
+    def do(self, row_id: int, edit: Callable[[], frozenset[int]]) -> None:
         """Carry out an edit, show what it makes of the review, and remember to say so."""
         before = self._session.review.units[row_id].status
         changed = edit()

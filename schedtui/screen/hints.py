@@ -11,7 +11,11 @@ from schedtui.review.registry import registered
 from schedtui.screen.looks import Look, sign_of
 
 if TYPE_CHECKING:
+    from collections.abc import Sequence
+
+    from schedtui.review.finding import Finding
     from schedtui.review.quantities import ComputedColumn
+    from schedtui.review.remedy import Remedy
     from schedtui.review.reviewed import UnitReview
     from schedtui.schedule.catalogue.field import Field
     from schedtui.screen.painter import Cell
@@ -70,6 +74,25 @@ def accepted(field: AnyField, system: System) -> str:
 def about_edit(field: AnyField, system: System) -> str:
     """Say what an edit accepts, and what the value is for."""
     return f"{field.label}: {accepted(field, system)} {field.doc}"
+
+
+def about_findings(findings: Sequence[Finding]) -> str:
+    """Say which findings are meant: those of one entry.
+
+    Args:
+        findings: the findings.
+    """
+    first = findings[0]
+    names = ", ".join(dict.fromkeys(one.check for one in findings))
+    at = f" at {first.condition}" if first.condition else ""
+    return f"{names}{at}{' (accepted)' if first.accepted else ''}"
+
+
+def about_remedy(remedy: Remedy) -> str:
+    """Say which numbers a remedy would schedule, and what turns worse by it."""
+    changes = " with ".join(f"{one.field} {one.text} {one.unit}" for one in remedy.changes)
+    worse = f"; worse: {', '.join(remedy.worsens)}" if remedy.worsens else ""
+    return f"{changes}{worse}"
 
 
 def answer(label: str, before: str, after: str) -> str:

@@ -39,14 +39,32 @@ _LABELS = {
 
 def page_lines(page: Page, width: int) -> list[Strip]:
     """Return a page's lines; only a table's may be wider than so many cells."""
+    return laid_out(page, width)[0]
+
+
+def laid_out(page: Page, width: int) -> tuple[list[Strip], list[range]]:
+    """Return a page's lines, and which of them each entry of its lists takes.
+
+    Args:
+        page: the page.
+        width: cells there are; only a table may be wider.
+    """
     lines: list[Strip] = []
+    taken: list[range] = []
     before: Block | None = None
     for block in page.blocks:
         if lines and not isinstance(before, Heading):
             lines.append(_line(("", looks.GROUND)))
-        lines += _block(block, width)
+        if isinstance(block, Entries):
+            indent = _indent(block)
+            for one in block.entries:
+                begun = len(lines)
+                lines += _entry(one, indent, width)
+                taken.append(range(begun, len(lines)))
+        else:
+            lines += _block(block, width)
         before = block
-    return lines
+    return lines, taken
 
 
 def _line(*parts: tuple[str, Style]) -> Strip:
@@ -61,12 +79,13 @@ def _block(block: Block, width: int) -> Iterator[Strip]:
         case Paragraph(text):
             for part in _wrapped(text, width):
                 yield _line((part, looks.GROUND))
-        case Entries(entries):
-            longest = max((width_of(visible(one.label)) for one in entries), default=0)
-            for one in entries:
-                yield from _entry(one, min(longest, _LONGEST_LABEL) + 2, width)
         case Table():
             yield from _table(block, width)
+
+
+def _indent(block: Entries) -> int:
+    longest = max((width_of(visible(one.label)) for one in block.entries), default=0)
+    return min(longest, _LONGEST_LABEL) + 2
 
 
 def _entry(entry: Entry, indent: int, width: int) -> Iterator[Strip]:

@@ -6,7 +6,7 @@ from dataclasses import dataclass
 from typing import TYPE_CHECKING, ClassVar
 
 from rich.text import Text
-from textual.containers import Vertical, VerticalScroll
+from textual.containers import Horizontal, Vertical, VerticalScroll
 from textual.screen import ModalScreen
 from textual.widgets import Static
 
@@ -50,10 +50,13 @@ class Question(ModalScreen[str]):
     DEFAULT_CSS: ClassVar[str] = f"""
     Question {{ align: center middle; }}
     Question > Vertical {{
-        width: 60; max-width: 90%; height: auto; max-height: 100%; padding: 1 2;
+        width: 72; max-width: 90%; height: auto; max-height: 100%; padding: 1 2;
         background: {looks.SHALE}; color: {looks.CHALK};
     }}
     Question > Vertical.-long {{ width: 100%; max-width: 100%; height: 100%; }}
+    Question Horizontal {{ height: auto; }}
+    Question .key {{ width: 8; }}
+    Question .does {{ width: 1fr; }}
     Question VerticalScroll {{
         height: 1fr; background: {looks.SLATE}; scrollbar-size: 1 1; margin-bottom: 1;
     }}
@@ -74,7 +77,9 @@ class Question(ModalScreen[str]):
                     lines = "\n".join(map(visible, self._lines))
                     yield Static(Text(lines, style=looks.GROUND, no_wrap=True, overflow="ellipsis"))
             for answer in self._answers:
-                yield Static(Text(f"{answer.name:<8}{answer.label}", style=looks.UNIT))
+                with Horizontal():
+                    yield Static(Text(answer.name, style=looks.UNIT), classes="key")
+                    yield Static(Text(visible(answer.label), style=looks.UNIT), classes="does")
 
     def on_key(self, event: events.Key) -> None:
         """Take an answer's key, or scroll; every other key is for nobody."""

@@ -13,6 +13,7 @@ from schedtui.review.reviewed import CLEAR, UNREADABLE
 if TYPE_CHECKING:
     from collections.abc import Collection, Iterator, Mapping
 
+    from schedtui.review.finding import Finding
     from schedtui.review.reviewed import UnitReview
 
 _TAG = "tag"
@@ -53,6 +54,18 @@ def next_finding(
         for key in _blamed(units[one], columns):
             return one, key
     return None
+
+
+def blames(finding: Finding, column_key: str, columns: Collection[str]) -> bool:
+    """Tell whether a finding that nobody has accepted blames a cell.
+
+    Args:
+        finding: a finding of a unit; without a cell of its own in the table it stands at the tag.
+        column_key: the cell's column.
+        columns: the columns there are.
+    """
+    blamed = next((key for key in finding.fields if key in columns), _TAG)
+    return blamed == column_key and not finding.accepted
 
 
 def worst(units: Mapping[int, UnitReview], columns: Collection[str]) -> tuple[int, str] | None:

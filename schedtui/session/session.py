@@ -232,10 +232,9 @@ class Session:
 
     def cells_of(self, step: Done) -> tuple[tuple[int, str], ...]:
         """Return the cells of units that are there now and that a step is about."""
-        edit = step.edit
-        if not isinstance(edit, SetCell) or edit.table != "unit":
-            return ()
-        return ((edit.row_id, edit.key),) if edit.row_id in self._review.units else ()
+        edits = step.edit.edits if isinstance(step.edit, Together) else (step.edit,)
+        cells = (one for one in edits if isinstance(one, SetCell) and one.table == "unit")
+        return tuple((one.row_id, one.key) for one in cells if one.row_id in self._review.units)
 
     # -- the file ----------------------------------------------------------------------------
 

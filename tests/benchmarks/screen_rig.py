@@ -11,6 +11,7 @@ from __future__ import annotations
 import argparse
 import statistics
 import sys
+import tempfile
 from dataclasses import dataclass
 from pathlib import Path
 from typing import TYPE_CHECKING
@@ -141,10 +142,13 @@ def main() -> None:
         "PYTHONPATH": str(ROOT),
     }
     for columns, rows in SIZES:
+        # Each run is killed: its journal must not be offered to the next one, nor to its owner.
+        environment["XDG_STATE_HOME"] = tempfile.mkdtemp()
         with Terminal(command, columns, rows, environment) as terminal:
             terminal.wait_for(lambda text: options.shows in text)
             lines = [f"{columns}×{rows}, {options.colours}", *report(columns, keys(terminal)), ""]
         sys.stdout.write("\n".join(lines))
+    environment["XDG_STATE_HOME"] = tempfile.mkdtemp()
     sys.stdout.write(start_and_memory(command, options.shows, environment) + "\n")
 
 

@@ -4,7 +4,7 @@ import asyncio
 
 from textual.app import App
 
-from schedtui.report.page import Heading, Page, Paragraph, Table
+from schedtui.report.page import Entries, Entry, Heading, Page, Paragraph, Table
 from schedtui.screen.detail_pane import DetailPane
 
 LONG = Page(tuple(Paragraph(f"line {number}") for number in range(20)))
@@ -80,3 +80,47 @@ def test_a_page_of_another_name_stands_alone():
         assert (await press())[0].startswith("─>[Help]──")
 
     play(Page((Heading("Keys"),)), scene, "Help")
+
+
+ENTRIES = Page(
+    (
+        Heading("AHU-1: short"),
+        Entries(tuple(Entry("short", f"head {n}", (f"line {n}",) * n) for n in range(1, 13))),
+    )
+)
+
+
+def test_an_entry_that_is_meant_has_a_sign_and_stays_in_sight():
+    async def scene(pane, press):
+        told, done = [], []
+        pane.chose, pane.acts = told.append, {"enter": lambda: done.append(pane._meant)}
+        await press("enter")
+        assert done == []  # nothing is meant
+        pane.show("Findings", ENTRIES, about=1, meant=0)
+
+        def meant(lines):
+            (line,) = [line for line in lines if line.startswith(">")]
+            return line.split()[2]
+
+        lines = await press()
+        assert lines[1].startswith(" AHU-1: short")
+        assert meant(lines) == "1"
+        assert meant(await press("down", "down")) == "3"
+        assert meant(await press("up")) == "2"
+        assert meant(await press("pagedown", "pagedown")) == str(told[-1] + 1)
+        here = told[-1] + 1
+        await press("enter")
+        assert done == [here - 1]
+        for _ in range(here + 1):  # line by line to its end, then to the next
+            if told[-1] != here - 1:
+                break
+            lines = await press("down")
+        assert meant(lines) == str(here + 1)
+        assert meant(await press("home")) == "1"
+        await press("end")
+        assert told[-1] == 11
+        lines = await press("up")  # the last is longer than the pane: a line back first
+        assert told[-1] == 11
+        assert lines[-1].split() == ["line", "12"]
+
+    play(ENTRIES, scene)

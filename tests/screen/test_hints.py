@@ -1,8 +1,11 @@
 from __future__ import annotations
 
+from dataclasses import replace
+
 import pytest
 
 from schedtui.review.quantities import COLUMNS
+from schedtui.review.remedy import Change, Remedy
 from schedtui.review.reviewed import review
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.schedule.load import load
@@ -74,3 +77,20 @@ def test_the_mark_is_explained(table):
 
 def test_an_answer():
     assert hints.answer("AHU-1", "short", "short") == "AHU-1 is still short"
+
+
+def test_a_remedy_says_its_numbers_and_what_turns_worse():
+    both = (Change("cool_total", "390", "MBH"), Change("cool_lat_wb", "52.4", "°F"))
+    assert hints.about_remedy(Remedy(both, ())) == "cool_total 390 MBH with cool_lat_wb 52.4 °F"
+    worse = Remedy(both[:1], ("shr-low", "motor-short"))
+    assert hints.about_remedy(worse) == "cool_total 390 MBH; worse: shr-low, motor-short"
+
+
+def test_findings_of_one_entry_are_named_once_with_their_condition(table):
+    (reviewed,) = table._review.units.values()
+    first = reviewed.findings[0]
+    peak = replace(first, check="a-check", condition="summer peak")
+    twice = (peak, peak, replace(peak, check="another"))
+    assert hints.about_findings(twice) == "a-check, another at summer peak"
+    accepted = replace(peak, condition=None, accepted=True)
+    assert hints.about_findings((accepted,)) == "a-check (accepted)"

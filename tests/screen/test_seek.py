@@ -1,5 +1,7 @@
 from __future__ import annotations
 
+from dataclasses import replace
+
 import pytest
 
 from schedtui.review.reviewed import review
@@ -62,3 +64,13 @@ def test_a_finding_without_a_column_stands_at_the_tag():
 def test_the_worst_comes_first(kinds, place, column):
     found, ids = units(*kinds)
     assert seek.worst(found, COLUMNS) == (ids[place], column)
+
+
+def test_a_finding_blames_its_first_cell_that_is_shown_or_stands_at_the_tag():
+    found, ids = units(WET)
+    wet = next(one for one in found[ids[0]].findings if one.check == "wet-above-dry")
+    assert seek.blames(wet, "cool_lat_wb", COLUMNS)
+    assert not seek.blames(wet, "cool_lat_db", COLUMNS)
+    assert seek.blames(wet, "cool_lat_db", COLUMNS - {"cool_lat_wb"})
+    assert seek.blames(wet, "tag", {"tag"})
+    assert not seek.blames(replace(wet, accepted=True), "cool_lat_wb", COLUMNS)
