@@ -72,7 +72,7 @@ def test_a_heating_condition_has_its_states_and_figures(units):
 
 
 def test_a_unit_at_no_condition_says_so(reviewed):
-    found = reviewed('''
+    found = reviewed("""
 [project]
 title = "Nowhere"
 units = "IP"
@@ -84,7 +84,7 @@ outdoor_wb = 75
 [[unit]]
 tag = "AHU-1"
 conditions = []
-''')
+""")
     (unit,) = found.units.values()
     assert unit_air_page(unit).blocks == (Paragraph("AHU-1: no condition applies."),)
 
