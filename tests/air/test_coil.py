@@ -91,9 +91,9 @@ def test_the_same_coil_in_both_systems() -> None:
     # 1.2 kg/m³ differ (engineering practice; 1 MBH = 0.29307107 kW, 1 cfm = 0.47194745 L/s).
     for t_e, wb_e, t_l, wb_l in [(80, 67, 55, 54), (95, 75, 52, 51.5), (78, 55, 60, 48)]:
         ip = coil_load(45_000, IP.by_wet_bulb(t_e, wb_e), IP.by_wet_bulb(t_l, wb_l))
-        metric = [degrees(SI, t) for t in (t_e, wb_e, t_l, wb_l)]
+        e, we, lv, wl = (degrees(SI, t) for t in (t_e, wb_e, t_l, wb_l))
         mass = 10_000 * 0.47194745 / 1000 * 1.2
-        si = coil_load(mass, SI.by_wet_bulb(*metric[:2]), SI.by_wet_bulb(*metric[2:]))
+        si = coil_load(mass, SI.by_wet_bulb(e, we), SI.by_wet_bulb(lv, wl))
         assert si.total / 0.29307107 == pytest.approx(ip.total, rel=4e-3)
         assert si.sensible / 0.29307107 == pytest.approx(ip.sensible, rel=4e-3)
         assert si.tons == pytest.approx(ip.tons, rel=4e-3)

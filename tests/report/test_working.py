@@ -103,7 +103,8 @@ def test_every_printed_result_comes_out_of_the_printed_numbers(invented, reviewe
 
 def test_heating_and_equipment_multiply_out_too(invented_winter, reviewed) -> None:
     """Every step of heating, water, steam, power, fuel, fans and faces, in both systems."""
-    steps, worst = Counter(), 0.0
+    steps: Counter[tuple[str, str]] = Counter()
+    worst = 0.0
     for document in invented_winter.documents(WINTERS):
         system = document["project"]["units"]
         for unit in reviewed(tomli_w.dumps(document)).units.values():

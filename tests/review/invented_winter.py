@@ -134,13 +134,14 @@ class _Winter:
 
     def _water(self, coil: str, entering: float, leaving: float, cfm: float) -> Values:
         fluid = self.random.choice(GLYCOLS)
-        made = {
+        made: Values = {
             f"{coil}_ewt": self._degrees(entering, entering + 2),
             f"{coil}_lwt": self._degrees(leaving, leaving + 2),
             f"{coil}_flow": round(cfm * 0.004 * (1 if self.ip else 0.063), 2),
         }
         if fluid != "water":
-            made |= {f"{coil}_fluid": fluid, f"{coil}_glycol": self.random.choice([25, 30, 40])}
+            made[f"{coil}_fluid"] = fluid
+            made[f"{coil}_glycol"] = self.random.choice([25, 30, 40])
             made |= self._now_and_then(0.4, glycol_by="volume")
         return made
 

@@ -117,8 +117,13 @@ def test_an_acceptance_lapses_with_any_of_its_inputs(before, after):
         ("capacity = 200", "capacity = 900"),
         ('tag = "AHU-1"', 'tag = "AHU-1"\nlocation = "roof"'),
         ("fan_rise = 2.0", "fan_rise = 2.0\nmotor_power = 10\nheat_total = 90"),
-        ("[[plant]]", "[[condition]]\nname = 'dry'\nseason = 'cooling'\noutdoor_db = 99\n"
-         "outdoor_wb = 62\n[[plant]]"),
+        (
+            "[[plant]]",
+            (
+                "[[condition]]\nname = 'dry'\nseason = 'cooling'\noutdoor_db = 99\n"
+                "outdoor_wb = 62\n[[plant]]"
+            ),
+        ),
     ],
 )  # fmt: skip
 def test_an_acceptance_stands_whatever_else_changes(before, after):

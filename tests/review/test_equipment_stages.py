@@ -104,7 +104,7 @@ def judged_by(case):
 
 
 def test_it_gives_what_the_checks_judge_by(winters) -> None:
-    compared = Counter()
+    compared: Counter[str] = Counter()
     for case in winters:
         own = {one.label: one.required for one in equipment(case)[1]}
         figures = judged_by(case)
