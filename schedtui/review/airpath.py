@@ -6,6 +6,7 @@ give it. Judges nothing.
 
 from __future__ import annotations
 
+from abc import ABC, abstractmethod
 from typing import TYPE_CHECKING, Any, Self, cast
 
 from schedtui.air import fan
@@ -30,7 +31,7 @@ _SETTLED = 1e-12  # relative change at which an iteration has settled
 _MOST_TURNS = 100
 
 
-class AirPath:
+class AirPath(ABC):
     """One unit at one condition.
 
     Args:
@@ -93,9 +94,9 @@ class AirPath:
         return outdoor_air(self.condition, self.site, self.lettered("o"))
 
     @property
+    @abstractmethod
     def fan_inlet(self) -> State:
         """Air at the supply fan's inlet; which that is, cooling and heating know."""
-        raise NotImplementedError
 
     # Flows
 
@@ -162,9 +163,9 @@ class AirPath:
         return share
 
     @property
+    @abstractmethod
     def exhausted(self) -> tuple[State, str]:
         """The air that leaves through the recovery, with its letter; cooling and heating know."""
-        raise NotImplementedError
 
     @figure
     def exhaust_mass(self) -> float:

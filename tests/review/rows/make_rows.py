@@ -1119,7 +1119,7 @@ F_ROWS: list[Row] = [
     },
     {
         "tag": "F-2",
-        "serves": "Lecture, return state given",
+        "serves": "Seminar, return state given",
         "q": 3125,
         "qo": 940,
         "ret_rh": (25.0, 48),
