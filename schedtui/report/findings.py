@@ -174,12 +174,24 @@ def finding_entries(
     return Entries(tuple(entries.values()))
 
 
+# A difference of these in percent says nothing: 44.5 °F is not "−1212 %" of −4 °F.
+_NO_RATIOS = ("°F", "°C", "K", "%")
+
+
+def _apart(finding: Finding) -> str:
+    """Say how far scheduled and required are apart: in percent, or in the unit of a scale."""
+    scheduled, required = finding.scheduled, finding.required
+    if finding.unit in _NO_RATIOS and scheduled is not None and required is not None:
+        return f"{scheduled - required:+.1f} {finding.unit}"
+    return f"{finding.margin:+.1f} %"
+
+
 def _head(finding: Finding) -> str:
     head = finding.check
     if finding.condition and finding.subject.table == "unit":
         head += f" at {finding.condition}"
     if finding.margin is not None:
-        head += f", {finding.margin:+.1f} %"
+        head += f", {_apart(finding)}"
     return f"{head} (accepted)" if finding.accepted else head
 
 

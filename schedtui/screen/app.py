@@ -209,7 +209,7 @@ class ScheduleApp(App[None]):
                 self.do(row_id, lambda: self._session.set_cell("unit", row_id, key, message.text))
             except AmountError as error:
                 grid.refuse(str(error))
-                self._around.hint(f"Not taken: {error}")
+                self._around.hint(f'Not taken: "{message.text}" {error}')
                 return
         grid.end_edit(message.then)
         if self._grid.cursor == (row_id, key):  # else it is shown since the cursor has moved
@@ -358,8 +358,9 @@ class ScheduleApp(App[None]):
             return
         found = seek.next_finding(self._session.review.units, *cursor, self._column_keys)
         if found is None:
-            self._around.hint("Nothing found in any unit")
+            self._around.hint("Nothing found in any unit; schedtui check tells the rest")
         else:
+            self._around.show_findings()
             self._grid.move_to(*found)
 
     def action_turn_pane(self) -> None:

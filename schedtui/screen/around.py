@@ -212,6 +212,12 @@ class Around:
             return note or hints.about_edit(field, self._session.document.system)
         return hints.about_scheduled(reviewed, field, cell)
 
+    def show_findings(self) -> None:
+        """Show the pane's first page, where the findings are."""
+        if self.helping or self._page:
+            self.helping, self._page = False, 0
+            self.show_pane()
+
     def turn_page(self) -> None:
         """Show the pane's next page."""
         self._page = (self._page + 1) % len(_PAGES)

@@ -181,6 +181,8 @@ class Filing:
 
     def leave(self) -> None:
         """Leave, asking first where something is unsaved."""
+        if self._is_busy():
+            return
         if not self._session.unsaved:
             self._app.exit()
             return

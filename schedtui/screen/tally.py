@@ -10,6 +10,7 @@ from typing import TYPE_CHECKING
 
 from schedtui.review.finding import WORST_FIRST
 from schedtui.review.reviewed import UNREADABLE
+from schedtui.schedule.document import ARRAYS, SINGLE
 from schedtui.screen.unit_table import mark_of_status
 
 if TYPE_CHECKING:
@@ -23,7 +24,9 @@ _NOTHING = "all clear"
 
 
 class Tally:
-    """How many units cannot be read, and how many findings there are of each severity.
+    """How many rows cannot be read, and how many findings there are of each severity.
+
+    Those of plants, conditions and the project count with the units'.
 
     Args:
         review: what is counted.
@@ -48,7 +51,16 @@ class Tally:
         for row_id in changed:
             self._units[row_id] = _of_unit(review.units[row_id])
             self._sum.update(self._units[row_id])
-        self._rest = Counter(map(_severity, _open(review.findings)))
+        plants = (one for plant in review.plants for one in plant.findings)
+        self._rest = Counter(map(_severity, _open([*review.findings, *plants])))
+        document = review.schedule.document
+        self._rest[UNREADABLE] = sum(
+            cell.bad
+            for table in (*SINGLE, *ARRAYS)
+            if table != "unit"
+            for row in document.rows(table)
+            for cell in row.cells.values()
+        )
 
     @property
     def texts(self) -> tuple[str, str]:

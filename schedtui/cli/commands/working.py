@@ -46,7 +46,7 @@ def _units(reviewed: Review, file: str, tag: str) -> list[UnitReview]:
     Raises:
         UsageError: there is none; it names the tags there are.
     """
-    found = [one for one in reviewed.units.values() if one.unit.tag == tag]
+    found = [one for one in reviewed.units.values() if tag in (one.unit.tag, one.label)]
     if not found:
         tags = dict.fromkeys(one.unit.tag for one in reviewed.units.values() if one.unit.tag)
         there = f"there are {_listed(tags)}" if tags else "it has no tagged unit"

@@ -6,6 +6,7 @@ is then missed without a word.
 
 from __future__ import annotations
 
+from difflib import get_close_matches
 from typing import TYPE_CHECKING
 
 from schedtui.review.check import Check, Faults
@@ -35,10 +36,12 @@ def find_in_schedule(case: ScheduleCase) -> Faults:
     """Look for unknown tables, and unknown keys in every table but the units."""
     document = case.schedule.document
     for name in document.unknown:
+        near = get_close_matches(name, (*SINGLE, *ARRAYS), n=1)
+        hint = f"; {near[0]} is one, if that was meant" if near else ""
         yield Fault(
-            "[{name}] is no table of a schedule; it is kept as it stands",
+            "{name} is no table of a schedule; it is kept as it stands{hint}",
             (name,),
-            values={"name": name},
+            values={"name": name, "hint": hint},
         )
     for table in (*SINGLE, *ARRAYS):
         for row in document.rows(table) if table != "unit" else ():

@@ -50,7 +50,7 @@ def _bad(value: Any, raw: str, problem: str) -> Typed:
 def _refuse(typed: Typed) -> Typed:
     """Return a cell a person typed, or refuse it if it turned out bad."""
     if typed.problem is not None:
-        raise AmountError(f"{typed.text} {typed.problem}")
+        raise AmountError(typed.problem)
     return typed
 
 
