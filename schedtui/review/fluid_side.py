@@ -56,6 +56,10 @@ class FluidSide:
         """Tell whether the coil is fed by water or glycol."""
         return unit.value_of(self.kind) == self.wet_kind
 
+    def supply(self, unit: Unit) -> str:
+        """Return what the coil takes from a plant: the fluid through it, else its kind."""
+        return unit.value_of(self.fluid if self.runs(unit) else self.kind)
+
     def stated(self, unit: Unit) -> bool:
         """Tell whether flow and both temperatures are stated."""
         return unit.stated(self.flow.key, self.entering.key, self.leaving.key)

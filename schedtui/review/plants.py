@@ -5,6 +5,7 @@ A sum is coincident: every unit at the same condition. Judges nothing.
 
 from __future__ import annotations
 
+from collections import Counter
 from dataclasses import dataclass, replace
 from typing import TYPE_CHECKING
 
@@ -14,7 +15,7 @@ from schedtui.review.figure import figure, known
 from schedtui.review.fluid_side import COOLING, HEATING, PREHEAT, FluidSide
 
 if TYPE_CHECKING:
-    from collections.abc import Iterator, Sequence
+    from collections.abc import Iterator, Mapping, Sequence
 
     from schedtui.review.case import Loads, UnitCase
     from schedtui.review.site import Site
@@ -38,7 +39,7 @@ class Feed:
         label: how messages name the unit.
         case: the unit with its evaluations.
         side: which of its coils.
-        share: how much of the unit's load this plant takes, units standing by left out: the
+        share: how much of the coil's load this plant takes, units standing by left out: the
             number of units times the plant's part in them.
     """
 
@@ -105,9 +106,21 @@ class PlantCase:
         if self.plant not in plants:
             return
         number = max(unit.quantity - unit.standby, 0)
-        share = number * _part(self.plant, plants)
-        for side in _fed(unit, self.plant.serves):
-            yield Feed(label, case, side, share)
+        for side, on in _split(unit, self.plant.serves, plants, self._supplies):
+            if self.plant in on:
+                yield Feed(label, case, side, number * _part(self.plant, on))
+
+    @figure
+    def _supplies(self) -> dict[str, str]:
+        """What each plant of the kind supplies, as far as the units on it alone tell."""
+        serves = self.plant.serves
+        told: dict[str, Counter[str]] = {}
+        for _, case in self._units:
+            plants = _plants_of(case.unit, self.schedule, serves)
+            supplies = {side.supply(case.unit) for side in _fed(case.unit, serves)}
+            if len(plants) == len(supplies) == 1:
+                told.setdefault(plants[0].name or "", Counter()).update(supplies)
+        return {name: most for name, supplies in told.items() if (most := most_common(supplies))}
 
     def unknown(self, condition: str) -> tuple[str, ...]:
         """Name the units whose load at a condition is not known."""
@@ -178,12 +191,57 @@ def _part(plant: Plant, plants: Sequence[Plant]) -> float:
     return (plant.capacity or 0.0) / sum(capacities)
 
 
+def _split(
+    unit: Unit, serves: str, plants: list[Plant], supplies: Mapping[str, str]
+) -> Iterator[tuple[FluidSide, list[Plant]]]:
+    """Yield each coil that plants of a kind feed, with those of the unit's plants that feed it.
+
+    A coil is on all of them, unless the unit has coils of different supply: then on those known
+    to supply what it takes, else on those of which nothing is known, else on all.
+    """
+    fed = list(_fed(unit, serves))
+    steam = [
+        side
+        for side in _there(unit, serves)
+        if side not in fed and side.supply(unit) == "steam" and unit.plants is not None
+    ]
+    # Hot water and steam preheat: the preheat is fed only where one of the plants is not the
+    # hot water's.
+    different = {side.supply(unit) for side in (*fed, *steam)}
+    if len(plants) == 1 or len(different) == 1:
+        yield from ((side, plants) for side in fed)
+        return
+    unknown = [plant for plant in plants if plant.name not in supplies]
+    for side in fed:
+        yield side, _supplying(side.supply(unit), plants, supplies) or unknown or plants
+    for side in steam:
+        left = unknown if len(unknown) < len(plants) else []
+        if on := _supplying("steam", plants, supplies) or left:
+            yield side, on
+
+
+def _supplying(supply: str, plants: list[Plant], supplies: Mapping[str, str]) -> list[Plant]:
+    return [plant for plant in plants if supplies.get(plant.name or "") == supply]
+
+
+def most_common(counted: Mapping[str, float]) -> str | None:
+    """Return what is counted most often, None where two are alike or nothing is counted."""
+    most = max(counted.values(), default=0.0)
+    names = [name for name, number in counted.items() if number == most]
+    return names[0] if len(names) == 1 else None
+
+
+def _there(unit: Unit, serves: str) -> tuple[FluidSide, ...]:
+    """Return the coils of a kind that a unit has."""
+    sides = (COOLING,) if serves == "cooling" else (HEATING, PREHEAT)
+    return tuple(side for side in sides if side.exists(unit))
+
+
 def _fed(unit: Unit, serves: str) -> tuple[FluidSide, ...]:
     """Return the coils of a unit that a plant feeds: those of its fluid.
 
     Where the unit names the plant and has no such coil, whatever it has is fed by it.
     """
-    sides = (COOLING,) if serves == "cooling" else (HEATING, PREHEAT)
-    there = tuple(side for side in sides if side.exists(unit))
+    there = _there(unit, serves)
     wet = tuple(side for side in there if side.runs(unit))
     return wet or (there if unit.plants is not None else ())

@@ -164,6 +164,48 @@ def test_two_plants_share_alike_where_one_capacity_is_not_known(plants):
         assert found.load == pytest.approx(HEATED / 2, rel=1e-6)
 
 
+GLYCOL = ('preheat_fluid = "propylene glycol"', "preheat_glycol = 30")
+
+
+def test_coils_of_different_supply_go_to_the_plants_that_supply_them(plants):
+    # 58 °F to 65 by the glycol's preheat, on to 95 °F by the water's coil; what either plant
+    # supplies is told by the units that are on it alone.
+    both = plant(name="water", capacity=300) + plant(name="glycol", capacity=900)
+    water, glycol = plants(
+        WINTERS, both,
+        unit('plants = ["water", "glycol"]', "preheat_lat_db = 65", *GLYCOL),
+        unit('plants = ["water"]', tag="B"),
+        unit('plants = ["glycol"]', 'heat_fluid = "propylene glycol"', "heat_glycol = 30", tag="C"),
+    )  # fmt: skip
+    assert water.load == pytest.approx(HEATED + 30 * 10.81998, rel=1e-6)
+    assert glycol.load == pytest.approx(HEATED + 7 * 10.81998, rel=1e-6)
+
+
+@pytest.mark.parametrize(
+    "other",
+    [
+        unit('plants = ["water"]', tag="B"),
+        unit('plants = ["steam"]', 'heat_kind = "steam"', tag="B"),
+    ],
+    ids=["the water is known", "the steam is known"],
+)
+def test_a_steam_preheat_is_on_the_plant_that_is_not_the_water_s(plants, other):
+    both = plant(name="water", capacity=300) + plant(name="steam", capacity=900)
+    mixed = unit('plants = ["water", "steam"]', "preheat_lat_db = 65", 'preheat_kind = "steam"')
+    water, steam = plants(WINTERS, both, mixed, other)
+    alone = {"water": 0.0, "steam": 0.0}
+    alone["steam" if 'heat_kind = "steam"' in other else "water"] = HEATED
+    assert water.load == pytest.approx(alone["water"] + 30 * 10.81998, rel=1e-6)
+    assert steam.load == pytest.approx(alone["steam"] + 7 * 10.81998, rel=1e-6)
+
+
+def test_coils_of_different_supply_are_shared_where_no_unit_tells_the_plants_apart(plants):
+    both = plant(name="one", capacity=300) + plant(name="two", capacity=900)
+    one, two = plants(WINTERS, both, unit("preheat_lat_db = 65", *GLYCOL))
+    assert one.load == pytest.approx(HEATED / 4, rel=1e-6)
+    assert two.load == pytest.approx(HEATED * 3 / 4, rel=1e-6)
+
+
 def test_a_unit_that_names_its_plant_is_on_no_other(plants):
     both = plant(name="one", capacity=300) + plant(name="two", capacity=900)
     named = unit('plants = ["one"]')

@@ -6,12 +6,12 @@ capacity.
 
 from __future__ import annotations
 
-from collections import Counter
 from typing import TYPE_CHECKING
 
 from schedtui.review.check import Check, Faults
 from schedtui.review.figure import known
 from schedtui.review.finding import Fault, Severity
+from schedtui.review.plants import most_common
 
 if TYPE_CHECKING:
     from schedtui.review.plants import Feed, PlantCase
@@ -25,17 +25,21 @@ def find(case: PlantCase) -> Faults:
 
 
 def _others(case: PlantCase, waters: list[tuple[Feed, str]]) -> Faults:
-    if not waters:
+    counted: dict[str, float] = {}
+    for feed, water in waters:
+        counted[water] = counted.get(water, 0.0) + feed.case.unit.quantity
+    if len(counted) <= 1:
         return
-    common = Counter(water for _, water in waters).most_common(1)[0][0]
-    others = [(feed.label, water) for feed, water in waters if water != common]
-    if others:
-        told = ", ".join(f"{label} ({water})" for label, water in others)
-        yield Fault(
-            "most units on {plant} are scheduled with {common}; others: {others}",
-            ("name",),
-            values={"plant": case.name, "common": common, "others": told},
-        )
+    common = most_common(counted)
+    if common is None:
+        # As many on the one as on the other: none of them can be called the odd one.
+        told = ", ".join(f"{feed.label} ({water})" for feed, water in waters)
+        sentence = "units on {plant} are scheduled with different water: {others}"
+    else:
+        told = ", ".join(f"{feed.label} ({water})" for feed, water in waters if water != common)
+        sentence = "most units on {plant} are scheduled with {common}; others: {others}"
+    values = {"plant": case.name, "common": common or "", "others": told}
+    yield Fault(sentence, ("name",), values=values)
 
 
 def _fluid(feed: Feed) -> str:
