@@ -17,6 +17,7 @@ from schedtui.review.finding import Fault, Measure, Severity
 from schedtui.review.fluid_side import COOLING, SIDES
 from schedtui.review.slips import slips
 from schedtui.schedule.catalogue.field import Field
+from schedtui.schedule.catalogue.plant import Plant
 from schedtui.schedule.catalogue.unit import Unit
 from schedtui.units import (
     AIR_PRESSURE,
@@ -78,8 +79,18 @@ def find_in_condition(case: ConditionCase) -> Faults:
 
 
 def find_in_plant(case: PlantCase) -> Faults:
-    """Look at the percentages of a plant."""
-    return _fractions(case.plant)
+    """Look at the percentages of a plant; hold capacity and flow against what its units need."""
+    yield from _fractions(case.plant)
+    for field, quantity, own in (
+        (Plant.capacity, LOAD, known(lambda: case.load)),
+        (Plant.flow, WATER_FLOW, known(lambda: case.flow)),
+    ):
+        typed = case.plant.value_of(field)
+        # Only too little looks like a slip: a plant may serve more than this schedule.
+        if typed and own and typed < own:
+            yield from _if_any(
+                _suspect(field, typed, typed / own, quantity, case.site.system, "its units'")
+            )
 
 
 def _fractions(row: Table) -> Faults:
@@ -188,6 +199,10 @@ def _heating(case: UnitCase) -> Faults:
     """Hold the heating against the row's own, else against what the coil needs."""
     total = case.unit.heat_total
     own = known(lambda: case.row_heat.heat_load) or known(lambda: case.heat_governing.heat_load)
+    preheat, warmed = case.unit.preheat_total, known(lambda: case.row_heat.preheat_load)
+    if preheat and warmed and warmed > 0:
+        ratio = preheat / warmed
+        yield from _if_any(_suspect(Unit.preheat_total, preheat, ratio, LOAD, case.site.system))
     if total and own and own > 0:
         yield from _if_any(_suspect(Unit.heat_total, total, total / own, LOAD, case.site.system))
 
@@ -226,7 +241,12 @@ def _if_any(fault: Fault | None) -> Faults:
 
 
 def _suspect(
-    field: Number, typed: float, ratio: float, quantity: Quantity, system: System
+    field: Number,
+    typed: float,
+    ratio: float,
+    quantity: Quantity,
+    system: System,
+    whose: str = "the row's own",
 ) -> Fault | None:
     """Return the fault of a number that stands to the expected one as a slip makes it."""
     fitting = list(slips(quantity, system, ratio))
@@ -237,12 +257,12 @@ def _suspect(
         for slip in fitting
     )
     return Fault(
-        "{label} {scheduled}, the row's own numbers make it {required}: looks {guesses}",
+        "{label} {scheduled}, {whose} numbers make it {required}: looks {guesses}",
         (field.key,),
         typed,
         typed / ratio,
         quantity,
-        {"label": field.label.lower(), "guesses": guesses},
+        {"label": field.label.lower(), "whose": whose, "guesses": guesses},
     )
 
 
