@@ -106,9 +106,38 @@ class PlantCase:
         if self.plant not in plants:
             return
         number = max(unit.quantity - unit.standby, 0)
-        for side, on in _split(unit, self.plant.serves, plants, self._supplies):
+        for side, on in self._split(unit, plants):
             if self.plant in on:
                 yield Feed(label, case, side, number * _part(self.plant, on))
+
+    def _split(self, unit: Unit, plants: list[Plant]) -> Iterator[tuple[FluidSide, list[Plant]]]:
+        """Yield each coil that plants of the kind feed, with those of the unit's that feed it.
+
+        A coil is on all of them, unless the unit has coils of different supply: then on those
+        known to supply what it takes, else on those of which nothing is known, else on all.
+        """
+        fed = _fed(unit, self.plant.serves)
+        if len(plants) == 1:
+            yield from ((side, plants) for side in fed)
+            return
+        steam: list[FluidSide] = []
+        if unit.plants is not None:
+            there = (side for side in _there(unit, self.plant.serves) if side not in fed)
+            steam = [side for side in there if side.supply(unit) == "steam"]
+        if len({side.supply(unit) for side in (*fed, *steam)}) == 1:
+            yield from ((side, plants) for side in fed)
+            return
+        unknown = [plant for plant in plants if plant.name not in self._supplies]
+        for side in fed:
+            yield side, self._supplying(side.supply(unit), plants) or unknown or plants
+        # Steam beside water is fed only where one of the plants is not the water's.
+        left = unknown if len(unknown) < len(plants) else []
+        for side in steam:
+            if on := self._supplying("steam", plants) or left:
+                yield side, on
+
+    def _supplying(self, supply: str, plants: list[Plant]) -> list[Plant]:
+        return [plant for plant in plants if self._supplies.get(plant.name or "") == supply]
 
     @figure
     def _supplies(self) -> dict[str, str]:
@@ -189,39 +218,6 @@ def _part(plant: Plant, plants: Sequence[Plant]) -> float:
     if not all(capacities):
         return 1 / len(plants)
     return (plant.capacity or 0.0) / sum(capacities)
-
-
-def _split(
-    unit: Unit, serves: str, plants: list[Plant], supplies: Mapping[str, str]
-) -> Iterator[tuple[FluidSide, list[Plant]]]:
-    """Yield each coil that plants of a kind feed, with those of the unit's plants that feed it.
-
-    A coil is on all of them, unless the unit has coils of different supply: then on those known
-    to supply what it takes, else on those of which nothing is known, else on all.
-    """
-    fed = list(_fed(unit, serves))
-    steam = [
-        side
-        for side in _there(unit, serves)
-        if side not in fed and side.supply(unit) == "steam" and unit.plants is not None
-    ]
-    # Hot water and steam preheat: the preheat is fed only where one of the plants is not the
-    # hot water's.
-    different = {side.supply(unit) for side in (*fed, *steam)}
-    if len(plants) == 1 or len(different) == 1:
-        yield from ((side, plants) for side in fed)
-        return
-    unknown = [plant for plant in plants if plant.name not in supplies]
-    for side in fed:
-        yield side, _supplying(side.supply(unit), plants, supplies) or unknown or plants
-    for side in steam:
-        left = unknown if len(unknown) < len(plants) else []
-        if on := _supplying("steam", plants, supplies) or left:
-            yield side, on
-
-
-def _supplying(supply: str, plants: list[Plant], supplies: Mapping[str, str]) -> list[Plant]:
-    return [plant for plant in plants if supplies.get(plant.name or "") == supply]
 
 
 def most_common(counted: Mapping[str, float]) -> str | None:
