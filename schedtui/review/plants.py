@@ -116,15 +116,11 @@ class PlantCase:
         A coil is on all of them, unless the unit has coils of different supply: then on those
         known to supply what it takes, else on those of which nothing is known, else on all.
         """
-        fed = _fed(unit, self.plant.serves)
-        if len(plants) == 1:
-            yield from ((side, plants) for side in fed)
-            return
-        steam: list[FluidSide] = []
-        if unit.plants is not None:
+        fed, steam = _fed(unit, self.plant.serves), []
+        if len(plants) > 1 and unit.plants is not None:
             there = (side for side in _there(unit, self.plant.serves) if side not in fed)
             steam = [side for side in there if side.supply(unit) == "steam"]
-        if len({side.supply(unit) for side in (*fed, *steam)}) == 1:
+        if len(plants) == 1 or len({side.supply(unit) for side in (*fed, *steam)}) == 1:
             yield from ((side, plants) for side in fed)
             return
         unknown = [plant for plant in plants if plant.name not in self._supplies]

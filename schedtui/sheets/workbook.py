@@ -33,7 +33,8 @@ MOST_SHEETS = 200
 _SQUEEZED = 2_000_000  # bytes a part may state whatever its packed size
 _RATIO = 250  # above that a part is no honest one: repetitive sheets reach about 100
 
-_BROKEN = (zipfile.BadZipFile, zlib.error, EOFError, NotImplementedError, RuntimeError, OSError)
+# RuntimeError: encrypted, or packed by a method that the library does not know.
+_BROKEN = (zipfile.BadZipFile, zlib.error, EOFError, RuntimeError, OSError)
 
 
 @dataclass(slots=True)

@@ -12,6 +12,7 @@ actual basis it is what is looked for.
 from __future__ import annotations
 
 import warnings
+from abc import ABC, abstractmethod
 from dataclasses import dataclass
 from functools import cached_property, lru_cache, wraps
 from typing import TYPE_CHECKING, Any
@@ -180,7 +181,7 @@ def secant(gap: Callable[[float], float], first: float, second: float) -> float:
     raise AssertionError("the fan's inlet does not settle")
 
 
-class AirPath:
+class AirPath(ABC):
     """One unit at one condition, from the bare values of a schedule file."""
 
     def __init__(self, project: Values, condition: Values, unit: Values) -> None:
@@ -225,16 +226,18 @@ class AirPath:
     # Which cooling and heating know
 
     @property
+    @abstractmethod
     def airflow(self) -> float:
-        raise NotImplementedError
+        """Supply air at the condition."""
 
     @property
+    @abstractmethod
     def exhaust(self) -> Moist:
         """Air that leaves through the recovery."""
-        raise NotImplementedError
 
+    @abstractmethod
     def fan_inlet(self, supply: float) -> Moist:
-        raise NotImplementedError
+        """Air that enters the fan."""
 
     # Masses
 

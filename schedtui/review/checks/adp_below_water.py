@@ -23,7 +23,7 @@ def find(at: Cooling) -> Faults:
         return
     ewt = at.unit.need(Unit.cool_ewt)
     at.refuse_left_by_loads()
-    if at.coil_mode != "wet":
+    if at.coil_mode != "wet" or _scheduled_dry(at.unit):
         return
     if at.adp < ewt:
         yield Fault(
@@ -33,6 +33,14 @@ def find(at: Cooling) -> Faults:
             ewt,
             TEMPERATURE,
         )
+
+
+def _scheduled_dry(unit: Unit) -> bool:
+    """Tell whether the row itself has a dry coil, one that meets no apparatus dew point.
+
+    Printed to its digits the wet bulb of such a coil may still leave a trace of moisture.
+    """
+    return unit.cool_total is not None and unit.cool_total == unit.cool_sensible
 
 
 CHECK = Check(
