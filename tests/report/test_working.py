@@ -2,10 +2,8 @@
 
 from __future__ import annotations
 
-import importlib.util
 import math
 import re
-import sys
 from collections import Counter
 from pathlib import Path
 
@@ -17,6 +15,8 @@ from schedtui.report.page import CAUTION, Calculations, Entries, Heading, Page, 
 from schedtui.report.working import put_in, result, unit_working_page, working_page
 from schedtui.text_width import width_of
 from schedtui.units import AIRFLOW, ENTHALPY, HUMIDITY_RATIO, LOAD
+from tests.report.by_hand import handbook
+from tests.review import invented, invented_winter
 
 FUNCTIONS = {"exp": math.exp, "ln": math.log, "min": min, "max": max}
 POWERS = str.maketrans({"²": "**2", "³": "**3", "⁴": "**4", "^": "**", "·": "*", "−": "-"})
@@ -25,36 +25,6 @@ FILES = 24
 WINTERS = 12
 HERE = Path(__file__).parent
 BY_HAND = HERE / "by_hand"
-
-
-def by_path(name: str, place: Path):
-    """Load a module that lies beside the tests, which are no packages."""
-    if name not in sys.modules:
-        spec = importlib.util.spec_from_file_location(name, place)
-        assert spec is not None
-        assert spec.loader is not None
-        module = importlib.util.module_from_spec(spec)
-        spec.loader.exec_module(module)
-        sys.modules[name] = module
-    return sys.modules[name]
-
-
-@pytest.fixture(scope="module")
-def invented():
-    """The invented units, which the tests of the review keep."""
-    return by_path("tests.review.invented", HERE.parent / "review" / "invented.py")
-
-
-@pytest.fixture(scope="module")
-def invented_winter():
-    """The invented units in winter, likewise."""
-    return by_path("tests.review.invented_winter", HERE.parent / "review" / "invented_winter.py")
-
-
-@pytest.fixture(scope="module")
-def handbook():
-    """The handbook's formulas, written down by hand."""
-    return by_path("tests.report.by_hand.handbook", BY_HAND / "handbook.py")
 
 
 def number(text: str) -> float:
@@ -79,7 +49,7 @@ def last_digit(text: str) -> float:
     return float(f"1e-{len(text.partition('.')[2])}")
 
 
-def test_every_printed_result_comes_out_of_the_printed_numbers(invented, reviewed) -> None:
+def test_every_printed_result_comes_out_of_the_printed_numbers(reviewed) -> None:
     steps, worst = 0, 0.0
     for document in invented.documents(FILES):
         for unit in reviewed(tomli_w.dumps(document)).units.values():
@@ -101,7 +71,7 @@ def test_every_printed_result_comes_out_of_the_printed_numbers(invented, reviewe
     assert 0.4 < worst <= 1  # rounding alone takes half a digit; the numbers put in hardly any
 
 
-def test_heating_and_equipment_multiply_out_too(invented_winter, reviewed) -> None:
+def test_heating_and_equipment_multiply_out_too(reviewed) -> None:
     """Every step of heating, water, steam, power, fuel, fans and faces, in both systems."""
     steps: Counter[tuple[str, str]] = Counter()
     worst = 0.0
@@ -144,7 +114,7 @@ def numbers_put_in(formula: str, filled: str) -> dict[str, float]:
 @pytest.mark.parametrize(
     "name", ["altitude_bypass", "metric_recovery", "actual_blow_through", "winter_frost"]
 )
-def test_a_working_recomputed_by_hand_from_its_printed_numbers(name, reviewed, handbook) -> None:
+def test_a_working_recomputed_by_hand_from_its_printed_numbers(name, reviewed) -> None:
     """The arithmetic is the handbook's, written down apart from the program's formulas.
 
     Beside each unit stands a line for each step, in the working's order: its symbol, which
@@ -342,7 +312,7 @@ def test_what_another_condition_has_said_is_not_said_again(works) -> None:
     assert said.count("As at cool.") >= 3  # the room, the return air, the air that leaves the coil
 
 
-def test_text_fits_eighty_columns(invented, reviewed) -> None:
+def test_text_fits_eighty_columns(reviewed) -> None:
     for document in invented.documents(4):
         for unit in reviewed(tomli_w.dumps(document)).units.values():
             shown = text.render(unit_working_page(unit))

@@ -1,14 +1,8 @@
-"""What the tests of the review share: drawn projects, the oracle, and short ways to a review.
-
-Tests are files and no packages, so the modules beside this one are loaded by their paths.
-"""
+"""What the tests of the review share: drawn projects, the oracle, and short ways to a review."""
 
 from __future__ import annotations
 
-import importlib.util
-import sys
 from dataclasses import dataclass
-from pathlib import Path
 from typing import TYPE_CHECKING, Any
 
 import pytest
@@ -19,50 +13,12 @@ from schedtui.review.reviewed import Review, UnitReview, review
 from schedtui.review.site import site_of
 from schedtui.schedule.load import load
 from schedtui.schedule.view import view
+from tests.review import drawn, invented_winter
+from tests.review.oracle_cooling import CoolingPath
+from tests.review.oracle_heating import HeatingPath
 
 if TYPE_CHECKING:
     from collections.abc import Callable, Mapping
-    from types import ModuleType
-
-HERE = Path(__file__).parent
-
-
-def _beside(name: str) -> ModuleType:
-    full = f"tests.review.{name}"
-    if full not in sys.modules:
-        spec = importlib.util.spec_from_file_location(full, HERE / f"{name}.py")
-        assert spec is not None
-        assert spec.loader is not None
-        module = importlib.util.module_from_spec(spec)
-        sys.modules[full] = module  # where dataclasses look their module up
-        spec.loader.exec_module(module)
-    return sys.modules[full]
-
-
-@pytest.fixture(scope="session")
-def oracle() -> ModuleType:
-    """The air by the real-gas model, and what its paths have in common."""
-    return _beside("oracle")
-
-
-@pytest.fixture(scope="session")
-def oracle_cooling(oracle: ModuleType) -> ModuleType:
-    """The cooling air path by the real-gas model."""
-    assert oracle.__name__ in sys.modules  # it imports from there
-    return _beside("oracle_cooling")
-
-
-@pytest.fixture(scope="session")
-def oracle_heating(oracle: ModuleType) -> ModuleType:
-    """The heating air path by the real-gas model."""
-    assert oracle.__name__ in sys.modules  # it imports from there
-    return _beside("oracle_heating")
-
-
-@pytest.fixture(scope="session")
-def drawn() -> ModuleType:
-    """The drawn projects."""
-    return _beside("drawn")
 
 
 def _reviewed(text: str | Mapping[str, Any]) -> Review:
@@ -121,12 +77,22 @@ def _pairs(projects: Callable[[str], Any], path: Any) -> list[Drawn]:
 
 
 @pytest.fixture(scope="session")
-def cooled(drawn: ModuleType, oracle_cooling: ModuleType) -> list[Drawn]:
+def cooled() -> list[Drawn]:
     """Every drawn unit at each of its cooling conditions."""
-    return _pairs(drawn.projects, oracle_cooling.CoolingPath)
+    return _pairs(drawn.projects, CoolingPath)
 
 
 @pytest.fixture(scope="session")
-def heated(drawn: ModuleType, oracle_heating: ModuleType) -> list[Drawn]:
+def heated() -> list[Drawn]:
     """Every drawn unit at each of its heating conditions."""
-    return _pairs(drawn.winters, oracle_heating.HeatingPath)
+    return _pairs(drawn.winters, HeatingPath)
+
+
+@pytest.fixture(scope="session")
+def winters() -> list[UnitCase]:
+    """The cases of the invented units in winter."""
+    return [
+        unit.case
+        for document in invented_winter.documents(12)
+        for unit in _reviewed(document).units.values()
+    ]

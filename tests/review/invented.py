@@ -16,25 +16,54 @@ UNITS_EACH = 12
 
 def documents(count: int) -> tuple[Values, ...]:
     """Return so many files, half of them in each unit system, the same ones every time."""
-    return tuple(_Draw(place).document() for place in range(count))
+    return tuple(_Working("working", place).document() for place in range(count))
 
 
-class _Draw:
-    """Draws a file; ranges are in °F, cfm and MBH."""
+class Draw:
+    """Draws a file; ranges are in °F, cfm and MBH.
 
-    def __init__(self, place: int) -> None:
-        self.place = place
-        self.random = random.Random(f"working {place}")  # noqa: S311  a draw, not a secret
+    Args:
+        name: of what is drawn: it sows the draw, and the file's title begins with it.
+        place: of the file among the others.
+    """
+
+    def __init__(self, name: str, place: int) -> None:
+        self.name, self.place = name, place
+        self.random = random.Random(f"{name} {place}")  # noqa: S311  a draw, not a secret
         self.ip = place % 2 == 0
 
-    def document(self) -> Values:
+    def _project(self) -> Values:
         feet = self.random.choice([0, 1_200, 2_460, 5_280, 7_000])
-        project: Values = {
-            "title": f"Invented {self.place}",
+        return {
+            "title": f"{self.name.capitalize()} {self.place}",
             "units": "IP" if self.ip else "SI",
             "airflow_basis": BASES[self.place % 3],
             "altitude": feet if self.ip else round(feet * 0.3048),
         }
+
+    def _degrees(self, low: float, high: float) -> float:
+        drawn = self.random.uniform(low, high)
+        return round(drawn if self.ip else (drawn - 32) / 1.8, 1)
+
+    def _rise(self, low: float, high: float) -> float:
+        return round(self.random.uniform(low, high) / (1 if self.ip else 1.8), 1)
+
+    def _flow(self, cfm: float) -> int:
+        return round(cfm * (1 if self.ip else 0.472) / 5) * 5
+
+    def _load(self, mbh: float) -> float:
+        return round(mbh * (1 if self.ip else 0.293), 1)
+
+    def _now_and_then(self, share: float, **values: Any) -> Values:
+        return values if self.random.random() < share else {}
+
+
+class _Working(Draw):
+    """Draws a file with every path of the air."""
+
+    def document(self) -> Values:
+        """Return the file's tables."""
+        project = self._project()
         if self.place % 5 == 4:
             project["pressure"] = 12.9 if self.ip else 96.4
         outdoor = {"name": "peak", "season": "cooling", "outdoor_db": self._degrees(84, 104)}
@@ -56,22 +85,6 @@ class _Draw:
             "condition": [outdoor, mild],
             "unit": [self._unit(place) for place in range(UNITS_EACH)],
         }
-
-    def _degrees(self, low: float, high: float) -> float:
-        drawn = self.random.uniform(low, high)
-        return round(drawn if self.ip else (drawn - 32) / 1.8, 1)
-
-    def _rise(self, low: float, high: float) -> float:
-        return round(self.random.uniform(low, high) / (1 if self.ip else 1.8), 1)
-
-    def _flow(self, cfm: float) -> int:
-        return round(cfm * (1 if self.ip else 0.472) / 5) * 5
-
-    def _load(self, mbh: float) -> float:
-        return round(mbh * (1 if self.ip else 0.293), 1)
-
-    def _now_and_then(self, share: float, **values: Any) -> Values:
-        return values if self.random.random() < share else {}
 
     def _unit(self, place: int) -> Values:
         cfm = self.random.uniform(1_500, 60_000)

@@ -5,37 +5,22 @@ Plain values from a fixed seed, as they stand in a file; imports nothing of the 
 
 from __future__ import annotations
 
-import random
-from typing import Any
+from tests.review.invented import UNITS_EACH, Draw, Values
 
-Values = dict[str, Any]
-
-BASES = ("standard", "site", "actual")
-UNITS_EACH = 12
 GLYCOLS = ("water", "propylene glycol", "ethylene glycol")
 
 
 def documents(count: int) -> tuple[Values, ...]:
     """Return so many files, half of them in each unit system, the same ones every time."""
-    return tuple(_Winter(place).document() for place in range(count))
+    return tuple(_Winter("winter", place).document() for place in range(count))
 
 
-class _Winter:
-    """Draws a file; ranges are in °F, cfm and MBH."""
-
-    def __init__(self, place: int) -> None:
-        self.place = place
-        self.random = random.Random(f"winter {place}")  # noqa: S311  a draw, not a secret
-        self.ip = place % 2 == 0
+class _Winter(Draw):
+    """Draws a file of units in winter."""
 
     def document(self) -> Values:
-        feet = self.random.choice([0, 1_200, 2_460, 5_280, 7_000])
-        project: Values = {
-            "title": f"Winter {self.place}",
-            "units": "IP" if self.ip else "SI",
-            "airflow_basis": BASES[self.place % 3],
-            "altitude": feet if self.ip else round(feet * 0.3048),
-        }
+        """Return the file's tables."""
+        project = self._project()
         cold = self._degrees(-15, 25)
         night: Values = {"name": "night", "season": "heating", "outdoor_db": cold}
         match self.place % 4:
@@ -56,22 +41,6 @@ class _Winter:
             "condition": [night, peak, mild],
             "unit": [self._unit(place) for place in range(UNITS_EACH)],
         }
-
-    def _degrees(self, low: float, high: float) -> float:
-        drawn = self.random.uniform(low, high)
-        return round(drawn if self.ip else (drawn - 32) / 1.8, 1)
-
-    def _rise(self, low: float, high: float) -> float:
-        return round(self.random.uniform(low, high) / (1 if self.ip else 1.8), 1)
-
-    def _flow(self, cfm: float) -> int:
-        return round(cfm * (1 if self.ip else 0.472) / 5) * 5
-
-    def _load(self, mbh: float) -> float:
-        return round(mbh * (1 if self.ip else 0.293), 1)
-
-    def _now_and_then(self, share: float, **values: Any) -> Values:
-        return values if self.random.random() < share else {}
 
     def _unit(self, place: int) -> Values:
         cfm = self.random.uniform(1_500, 60_000)

@@ -2,13 +2,9 @@
 
 from __future__ import annotations
 
-import importlib.util
-import sys
 from collections import Counter
-from pathlib import Path
 
 import pytest
-import tomli_w
 
 from schedtui.air.fan import shaft_power
 from schedtui.review.equipment_stages import equipment
@@ -20,24 +16,6 @@ STATED_OF_EQUIPMENT = {
     "Q_cw", "Q_hw", "Q_pw", "t_cw1", "t_cw2", "t_hw1", "t_hw2", "t_pw1", "t_pw2", "G_v", "m_st",
     "p_gauge", "P_el", "q_in", "p_f", "p_rf", "A", "q_tn", "q_f",
 }  # fmt: skip
-
-
-@pytest.fixture(scope="module")
-def winters(reviewed):
-    """The cases of the invented units in winter."""
-    name = "tests.review.invented_winter"
-    if name not in sys.modules:
-        place = Path(__file__).with_name("invented_winter.py")
-        spec = importlib.util.spec_from_file_location(name, place)
-        assert spec is not None
-        assert spec.loader is not None
-        sys.modules[name] = importlib.util.module_from_spec(spec)
-        spec.loader.exec_module(sys.modules[name])
-    return [
-        unit.case
-        for document in sys.modules[name].documents(12)
-        for unit in reviewed(tomli_w.dumps(document)).units.values()
-    ]
 
 
 def test_every_number_of_equipment_stands_at_a_condition_or_in_the_row(winters) -> None:

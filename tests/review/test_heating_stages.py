@@ -2,13 +2,9 @@
 
 from __future__ import annotations
 
-import importlib.util
 import math
-import sys
-from pathlib import Path
 
 import pytest
-import tomli_w
 
 from schedtui.air.step import Step
 from schedtui.review.figure import known
@@ -40,24 +36,6 @@ outdoor_airflow = 4000
 room_heat_db = 70
 heat_lat_db = 95
 """
-
-
-@pytest.fixture(scope="module")
-def winters(reviewed):
-    """The cases of the invented units in winter."""
-    name = "tests.review.invented_winter"
-    if name not in sys.modules:
-        place = Path(__file__).with_name("invented_winter.py")
-        spec = importlib.util.spec_from_file_location(name, place)
-        assert spec is not None
-        assert spec.loader is not None
-        sys.modules[name] = importlib.util.module_from_spec(spec)
-        spec.loader.exec_module(sys.modules[name])
-    return [
-        unit.case
-        for document in sys.modules[name].documents(12)
-        for unit in reviewed(tomli_w.dumps(document)).units.values()
-    ]
 
 
 def alike(one: float, other: float) -> bool:

@@ -10,11 +10,8 @@ that both have alike within 0.5 %.
 
 from __future__ import annotations
 
-import importlib.util
 import random
-import sys
 from dataclasses import dataclass
-from pathlib import Path
 from typing import Any
 
 import pytest
@@ -25,6 +22,7 @@ from schedtui.review.part_load import PartLoad, cooling_at
 from schedtui.review.site import site_of
 from schedtui.schedule.load import load
 from schedtui.schedule.view import view
+from tests.review.oracle_part_load import PartLoad as OraclePartLoad
 
 CONTROLS = ("bypass", "reheat", "airflow", "coil")
 PROJECTS, UNITS_EACH = 6, 12  # in each unit system: 144 units
@@ -138,21 +136,7 @@ class Both:
 
 
 @pytest.fixture(scope="module")
-def oracle_part_load(oracle_cooling):
-    assert oracle_cooling.__name__ in sys.modules  # it imports from there
-    name = "tests.review.oracle_part_load"
-    if name not in sys.modules:
-        place = Path(__file__).with_name("oracle_part_load.py")
-        spec = importlib.util.spec_from_file_location(name, place)
-        assert spec is not None
-        assert spec.loader is not None
-        sys.modules[name] = module = importlib.util.module_from_spec(spec)
-        spec.loader.exec_module(module)
-    return sys.modules[name]
-
-
-@pytest.fixture(scope="module")
-def both(oracle_part_load):
+def both():
     found = []
     for system in ("IP", "SI"):
         for place in range(PROJECTS):
@@ -162,7 +146,7 @@ def both(oracle_part_load):
             (condition,) = schedule.conditions
             for unit, row in zip(schedule.units, values["unit"], strict=True):
                 at = cooling_at(unit, condition, site)
-                path = oracle_part_load.PartLoad(values["project"], values["condition"][0], row)
+                path = OraclePartLoad(values["project"], values["condition"][0], row)
                 found.append(Both(row, at, path))
     return found
 

@@ -27,6 +27,7 @@ from schedtui.units import (
     TEMPERATURE,
     TEMPERATURE_DIFFERENCE,
 )
+from tests.review import drawn
 
 # 45 000 lb/h of standard air from 80/67 to 55/54 °F carry 399.5 MBH, 274.3 of it sensible, by
 # the handbook's formulas (ASHRAE Handbook—Fundamentals 2017, ch. 1).
@@ -285,7 +286,7 @@ def with_loads(unit, case, place):
 
 
 @pytest.fixture(scope="module")
-def both_systems(reviewed, drawn):
+def both_systems(reviewed):
     """Review every drawn IP project whose leaving states are bulbs, and the same in SI.
 
     Digits are taken strictly: those of a converted number are no statement about it.

@@ -6,6 +6,8 @@ formulas at freezing are the handbook's (Fundamentals, ch. 1, eqs. 33 and 35).
 
 import pytest
 
+from tests.review import oracle
+
 HEAD = """\
 [project]
 title = "Digits"
@@ -47,7 +49,7 @@ def found(one_unit):
 
 
 @pytest.fixture
-def load(oracle):
+def load():
     """Compute the total between two pairs of bulbs by the real-gas model [MBH]."""
 
     def bulb(db, wb):

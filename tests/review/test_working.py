@@ -2,10 +2,7 @@
 
 from __future__ import annotations
 
-import importlib.util
 import math
-import sys
-from pathlib import Path
 
 import pytest
 import tomli_w
@@ -14,6 +11,7 @@ from schedtui.review.figure import known
 from schedtui.review.part_load import PartLoad
 from schedtui.review.quantities import COOLING_FIGURES
 from schedtui.review.working import site_stage, without_repeats, working
+from tests.review import invented
 
 # What a schedule states, by its symbols; everything else must be some step's result.
 STATED = {"Q", "P", "RH", "wb", "dp", "B", "L", "ε", "η", "n", "Δt", "Z"}
@@ -23,25 +21,8 @@ STATED_TOO = {"p_0", "p_f", "P_each", "t_d1", "q_tk", "q_sk", "q_tn", "q_sn",
 AGAIN = {"T", "p_sat", "p_w", "W_sat", "q_f", "Δt_f", "Q_f", "P", "x_b", "t_out", "h_out"}
 
 
-def beside(stem: str):
-    name = f"tests.review.{stem}"
-    if name not in sys.modules:
-        spec = importlib.util.spec_from_file_location(name, Path(__file__).with_name(f"{stem}.py"))
-        assert spec is not None
-        assert spec.loader is not None
-        sys.modules[name] = importlib.util.module_from_spec(spec)
-        spec.loader.exec_module(sys.modules[name])
-    return sys.modules[name]
-
-
 @pytest.fixture(scope="module")
-def invented():
-    """The invented units."""
-    return beside("invented")
-
-
-@pytest.fixture(scope="module")
-def evaluations(invented, reviewed):
+def evaluations(reviewed):
     """Every evaluation of the invented units, with its case."""
     return [
         (unit.case, at)

@@ -8,6 +8,10 @@ imports nothing of the program.
 from __future__ import annotations
 
 from math import exp, log
+from typing import TYPE_CHECKING
+
+if TYPE_CHECKING:
+    from collections.abc import Callable
 
 
 def _p_sat_ip(T):  # noqa: N803  the handbook's symbol; eq. 6
@@ -41,7 +45,7 @@ def _line(low, high, t, t_low, t_high):
     return low + (high - low) / (t_high - t_low) * (t - t_low)
 
 
-BOTH = {
+BOTH: dict[str, Callable[..., float]] = {
     "p_w RH": lambda rh, p: p * rh / 100,
     "p_w": lambda p: p,
     "W vapour": lambda pw, p: 0.621945 * pw / (p - pw),
@@ -59,7 +63,7 @@ BOTH = {
     "mean": lambda a, b: (a + b) / 2,
     "recovered": lambda x1, e, m_o, m_x, x3: x1 - e / 100 * (min(m_o, m_x) / m_o) * (x1 - x3),
 }
-IP = {
+IP: dict[str, Callable[..., float]] = {
     **BOTH,
     "T": lambda t: t + 459.67,
     "p_sat": _p_sat_ip,
@@ -85,7 +89,7 @@ IP = {
     "water factor": lambda density, heat: density * heat * 60,
     "carried": lambda k, q, t1, t2: k * q * (t1 - t2) / 1000,
 }
-SI = {
+SI: dict[str, Callable[..., float]] = {
     **BOTH,
     "T": lambda t: t + 273.15,
     "p_sat": _p_sat_si,
